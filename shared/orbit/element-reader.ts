@@ -1,0 +1,94 @@
+import type { ElementSetReading } from './element-set.ts';
+import { readTleText } from './tle-file.ts';
+
+export type { ElementFault, ElementSetReading, ReadElementSet } from './element-set.ts';
+
+/** Larger uploads are refused: 2 MB hold some 14,000 two-line sets. */
+export const LARGEST_FILE_BYTES = 2_000_000;
+
+const unreadable = (
+  line: number,
+  column: number,
+  code: string,
+  reason: string,
+): ElementSetReading => ({
+  format: 'tle',
+  accepted: [],
+  refused: [{ line, column, code, reason }],
+  unreadable: true,
+});
+
+/** Line and column, 1-based, of a byte. */
+function placeOf(bytes: Uint8Array, index: number): [number, number] {
+  let [line, start] = [1, 0];
+  for (let at = 0; at < index; at++) {
+    if (bytes[at] !== 10) continue;
+    line += 1;
+    start = at + 1;
+  }
+  return [line, index - start + 1];
+}
+
+/** Where the bytes stop being UTF-8. */
+function firstBadByte(bytes: Uint8Array): number {
+  let [good, bad] = [0, bytes.length];
+  const decodes = (length: number): boolean => {
+    try {
+      new TextDecoder('utf-8', { fatal: true }).decode(bytes.subarray(0, length), { stream: true });
+      return true;
+    } catch {
+      return false;
+    }
+  };
+  while (bad - good > 1) {
+    const middle = (good + bad) >> 1;
+    if (decodes(middle)) good = middle;
+    else bad = middle;
+  }
+  return good;
+}
+
+/** The text of an upload, or the reading that says why it is none. The byte order mark is dropped. */
+function textOf(bytes: Uint8Array): string | ElementSetReading {
+  if (bytes.length > LARGEST_FILE_BYTES)
+    return unreadable(1, 1, 'FILE_TOO_LARGE', 'The file is larger than 2 MB; split it.');
+  const nul = bytes.indexOf(0);
+  if (nul >= 0) {
+    const reason =
+      'The file holds a NUL byte: it is a binary file, not text. Upload a text file of element sets.';
+    return unreadable(...placeOf(bytes, nul), 'FILE_BINARY', reason);
+  }
+  try {
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+  } catch {
+    const reason = 'The file is not valid UTF-8 text; save it as UTF-8 or plain ASCII.';
+    return unreadable(...placeOf(bytes, firstBadByte(bytes)), 'FILE_ENCODING', reason);
+  }
+}
+
+/** Another kind of file than two-line elements, recognised by its first characters or its name. */
+function otherKind(text: string, fileName: string): string | null {
+  const start = text.trimStart();
+  if (/^[[{]/.test(start) || /\.json$/i.test(fileName)) return 'JSON';
+  if (/^CCSDS_/.test(start) || /\.(kvn|omm|oem)$/i.test(fileName)) return 'KVN';
+  if (/\.csv$/i.test(fileName) || /^[A-Z_]+,[A-Z_]+,/.test(start)) return 'CSV';
+  if (/^<\?xml|^<(\w+:)?(omm|ndm)\b/.test(start) || /\.xml$/i.test(fileName)) return 'XML';
+  return null;
+}
+
+/**
+ * Reads an uploaded element file. Pure and without a clock: the age of a set and its trial propagation are judged
+ * afterwards (`element-acceptance.ts`). Sets are judged one by one; a fault of structure makes the whole unreadable.
+ */
+export function readElementSets(bytes: Uint8Array, fileName: string): ElementSetReading {
+  const text = textOf(bytes);
+  if (typeof text !== 'string') return text;
+  if (text.trim() === '')
+    return unreadable(1, 1, 'FILE_EMPTY', 'The file is empty; choose a file with element sets.');
+  const kind = otherKind(text, fileName);
+  if (kind !== null) {
+    const reason = `This is a ${kind} file; only two-line element files (TLE, with or without names) are read. Fetch the sets in that form.`;
+    return unreadable(1, 1, 'FILE_TYPE', reason);
+  }
+  return readTleText(text);
+}
