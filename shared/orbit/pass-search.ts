@@ -62,7 +62,8 @@ export function searchPasses(query: PassQuery): PassSearchResult {
   }
   const samples: [number, number][] = times.map((ms) => [ms, value(ms)]);
   for (let i = 1; i + 1 < times.length; i++) {
-    const [a, b, c] = [samples[i - 1] ?? [0, 0], samples[i] ?? [0, 0], samples[i + 1] ?? [0, 0]];
+    const [a, b, c] = [samples[i - 1], samples[i], samples[i + 1]];
+    if (!a || !b || !c) continue;
     if (b[1] < 0 && b[1] >= a[1] && b[1] >= c[1] && b[1] > -3) {
       const ms = peak(value, a[0], c[0]);
       const v = value(ms);
