@@ -18,6 +18,7 @@ const face = (az: number, el: number, roll: number) => ({
   boresightElevationDeg: el,
   rollDeg: roll,
 });
+const uniform: LineTaper = { kind: 'uniform' };
 const taylor25: LineTaper = { kind: 'taylor', sidelobeDb: -25, nBar: 4 };
 const table: [number, number][] = [
   [0, 0],
@@ -90,8 +91,8 @@ describe('taper and beamwidth', () => {
   });
 
   it.each([
-    [10, 0.5, 0, { kind: 'uniform' }, 10.20918],
-    [32, 0.5, 45, { kind: 'uniform' }, 4.49291],
+    [10, 0.5, 0, uniform, 10.20918],
+    [32, 0.5, 45, uniform, 4.49291],
     [24, 0.50922, 60, taylor25, 10.0403],
     [64, 0.4876, 55, taylor25, 3.385515],
   ])(

@@ -244,9 +244,17 @@ export interface ConflictInterval extends Interval {
   requiredDb: number | null;
 }
 
+/** A part of a pass that lies within the hard end of a face; nothing outside it may ever be used. */
+export interface HardEndInterval extends Interval {
+  passId: string;
+  faceId: string;
+  direction: Direction;
+}
+
 export interface Facts {
   windows: UsableWindow[];
   conflicts: ConflictInterval[];
+  withinHardEnd: HardEndInterval[];
 }
 
 export const RULES = [
