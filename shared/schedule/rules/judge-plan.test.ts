@@ -157,7 +157,10 @@ describe('the rules of a plan', () => {
 
   it('closure: by place and direction, until further notice too; a reduction is no closure', () => {
     const world = plainDay();
-    const contact = both(world, goodPass(world));
+    const whole = both(world, goodPass(world));
+    if (!whole.transmit) throw new Error('no uplink');
+    const later = { ...whole.transmit, fromMs: whole.receive.fromMs + 10_000 };
+    const contact = { ...whole, transmit: later };
     const closed = (change: Partial<DayModel['closures'][number]>): Rule[] => {
       const closure = {
         id: 'c',
