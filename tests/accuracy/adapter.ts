@@ -2,6 +2,7 @@
  * The one door by which outside checks reach the computation. It only translates and calls product code; one import a
  * door.
  */
+import { solveBeamAssign, type BeamAssignInstance } from '../../server/solver/beam-assign.ts';
 import { readElementSets } from '../../shared/orbit/element-reader.ts';
 import { searchPasses } from '../../shared/orbit/pass-search.ts';
 import { fromIso, toIso } from '../../shared/time.ts';
@@ -40,3 +41,19 @@ export function passes(inputs: PassInputs): { items: object[]; sgp4Calls: number
 }
 
 export { readElementSets };
+
+/** Assignment instances of the plain format `beam-assign/1`. */
+export const solve = (
+  instance: BeamAssignInstance,
+  { timeLimitSeconds }: { timeLimitSeconds: number },
+): Promise<{
+  objective: number;
+  bound: number | null;
+  gap: number | null;
+  windows: string[];
+}> =>
+  solveBeamAssign(instance, timeLimitSeconds, {
+    now: () => performance.now(),
+    shouldStop: () => false,
+    onIncumbent: () => undefined,
+  });

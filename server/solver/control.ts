@@ -1,0 +1,7 @@
+/** What a solver run needs from outside: time, a way to be stopped, and somewhere to show better plans. */
+export interface RunControl {
+  /** Milliseconds, monotonic. */
+  now: () => number;
+  shouldStop: () => boolean;
+  onIncumbent: (columns: number[]) => void;
+}
