@@ -73,6 +73,7 @@ export const Score = z.strictObject({
   requirementsMet: z.number().int(),
   requirementsShort: z.number().int(),
 });
+export type Score = z.infer<typeof Score>;
 
 const summary = {
   id: Id,
