@@ -3,7 +3,7 @@ import {
   OpenAPIRegistry,
   type RouteConfig,
 } from '@asteasolutions/zod-to-openapi';
-import type { ZodObject, ZodType } from 'zod';
+import type { ZodObject } from 'zod';
 import { Problem } from '../shared/schemas/problem.ts';
 import type { RouteSpec } from './middleware/route.ts';
 

@@ -43,6 +43,8 @@ export const migrate = async (orm: MikroORM): Promise<void> => {
 
 /** Throws everything away and builds the tables anew; only ever for a demo whose seeding was cut off. */
 export const empty = async (orm: MikroORM): Promise<void> => {
-  await orm.schema.dropSchema({ dropMigrationsTable: true, disableForeignKeys: true });
+  const connection = orm.em.getConnection();
+  await connection.execute('pragma foreign_keys = off');
+  await orm.schema.dropSchema({ dropMigrationsTable: true });
   await migrate(orm);
 };

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { mayEver } from '../../../shared/policy.ts';
-import type { ContactModel, DayModel, Facts } from '../../../shared/schedule/model.ts';
+import type { DayModel, Facts } from '../../../shared/schedule/model.ts';
 import type { CreateAssignmentRun } from '../../../shared/schemas/run.ts';
 import { SECOND_MS } from '../../../shared/time.ts';
 import { inTransaction, reader, type Deps, type Person } from '../../deps.ts';
