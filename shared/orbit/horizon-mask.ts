@@ -6,6 +6,8 @@ export interface MaskProfile {
   isUniform: boolean;
   lowestRad: number;
   highestRad: number;
+  /** Largest slope, rad of elevation per rad of azimuth. */
+  steepestSlope: number;
   /** Ascending, rad in [0, 2 pi); empty for a uniform mask. */
   azimuthsRad: readonly number[];
   elevationsRad: readonly number[];
@@ -19,6 +21,7 @@ const uniform = (elevationDeg: number): MaskProfile => {
     isUniform: true,
     lowestRad: elevation,
     highestRad: elevation,
+    steepestSlope: 0,
     azimuthsRad: [],
     elevationsRad: [],
   };
@@ -30,10 +33,15 @@ export function maskProfile(mask: HorizonMask): MaskProfile {
   const first = mask[0]?.[1] ?? 0;
   if (mask.every(([, elevationDeg]) => elevationDeg === first)) return uniform(first);
   const elevationsRad = mask.map(([, elevationDeg]) => toRadians(elevationDeg));
+  const slopes = mask.map(([azimuthDeg, elevationDeg], index) => {
+    const [nextDeg, nextElevationDeg] = mask[(index + 1) % mask.length] ?? [0, 0];
+    return Math.abs(nextElevationDeg - elevationDeg) / (wrapDegrees(nextDeg - azimuthDeg) || 360);
+  });
   return {
     isUniform: false,
     lowestRad: Math.min(...elevationsRad),
     highestRad: Math.max(...elevationsRad),
+    steepestSlope: Math.max(...slopes),
     azimuthsRad: mask.map(([azimuthDeg]) => toRadians(wrapDegrees(azimuthDeg))),
     elevationsRad,
   };

@@ -2,6 +2,7 @@
 import { sgp4, twoline2satrec, type SatRec } from 'satellite.js';
 import { MINUTE_MS } from '../time.ts';
 import { epochOf } from './epoch.ts';
+import type { InertialState } from './topocentric.ts';
 
 export interface ElementLines {
   line1: string;
@@ -16,27 +17,8 @@ export interface Orbit {
   sgp4Calls: number;
 }
 
-interface Triple {
-  x: number;
-  y: number;
-  z: number;
-}
-
-/** What SGP4 answers: TEME position (km) and velocity (km/s), and the mean elements it made them from. */
-export interface TemeState {
-  position: Triple;
-  velocity: Triple;
-  /** Secular mean elements: Earth radii, rad, rad/min. */
-  meanElements: {
-    am: number;
-    em: number;
-    im: number;
-    Om: number;
-    om: number;
-    mm: number;
-    nm: number;
-  };
-}
+/** What SGP4 answers, in its TEME frame: position in km, velocity in km/s. */
+export type TemeState = InertialState;
 
 /** Prepares an element set. The lines must have been read by the element reader: nothing is checked here. */
 export function makeOrbit(elements: ElementLines): Orbit {
@@ -53,9 +35,10 @@ export function propagate(orbit: Orbit, ms: number): TemeState | null {
   orbit.sgp4Calls += 1;
   const state = sgp4(orbit.satrec, (ms - orbit.epochMs) / MINUTE_MS);
   if (!state) return null;
-  const { position, velocity } = state;
+  const { x, y, z } = state.position;
+  const { x: vx, y: vy, z: vz } = state.velocity;
   // SGP4 can answer NaN without an error code.
-  return Number.isFinite(position.x + position.y + position.z + velocity.x) ? state : null;
+  return Number.isFinite(x + y + z + vx + vy + vz) ? { x, y, z, vx, vy, vz } : null;
 }
 
 /**
@@ -63,3 +46,6 @@ export function propagate(orbit: Orbit, ms: number): TemeState | null {
  * 6 decayed (codes of AIAA 2006-6753); 0 for a position that is not a number.
  */
 export const failureCode = (orbit: Orbit): number => orbit.satrec.error;
+
+/** Square root of the factor by which drag has changed the semi-major axis since the epoch, at the latest call. */
+export const dragFactor = (orbit: Orbit): number => orbit.satrec.tempa;
