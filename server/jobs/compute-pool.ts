@@ -16,7 +16,9 @@ const workerFile = fileURLToPath(
 export class ComputePool {
   readonly #piscina = new Piscina({
     filename: workerFile,
-    execArgv: isSource ? ['--import', 'tsx'] : [],
+    execArgv: isSource
+      ? ['--import', new URL('../workers/register-tsx.mjs', import.meta.url).href]
+      : [],
     minThreads: 1,
     maxThreads: 2,
     idleTimeout: 60_000,

@@ -1,5 +1,5 @@
 import type { RunControl } from './control.ts';
-import { shortfallCost, type Assignment } from './model/assignment.ts';
+import { pieceCost, shortfallCost, type Assignment } from './model/assignment.ts';
 import { solveProgram, type ProgramAnswer } from './model/highs-solve.ts';
 import { makeProgram, startValues, type Program } from './model/program.ts';
 import { hardRows } from './model/rows.ts';
@@ -32,7 +32,7 @@ function objectiveOf(assignment: Assignment, program: Program): Float64Array {
   for (const [index, { value }] of assignment.columns.entries()) objective[index] = value;
   for (const [index, demand] of assignment.demands.entries())
     for (const [position, piece] of demand.pieces.entries())
-      objective[(program.firstPiece[index] ?? 0) + position] = -piece.cost;
+      objective[(program.firstPiece[index] ?? 0) + position] = -pieceCost(demand, piece);
   return objective;
 }
 

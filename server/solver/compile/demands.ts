@@ -11,6 +11,7 @@ import { linesAt } from '../../../shared/schedule/services.ts';
 import { intersect, MINUTE_MS, SECOND_MS } from '../../../shared/time.ts';
 import type { Demand, Maximum, ShortfallPiece } from '../model/assignment.ts';
 import { gapDemands } from './gap-demands.ts';
+import { legsOf, type Legs } from './option-legs.ts';
 import type { Option } from './options.ts';
 
 /** What a missing unit costs: one contact, ten minutes, or the volume of ten minutes. */
@@ -20,20 +21,6 @@ const SLOPES = [0.25, 0.75, 1.25, 1.75] as const;
 
 export const convexPieces = (least: number, unit: number): ShortfallPiece[] =>
   SLOPES.map((slope) => ({ size: least / SLOPES.length, cost: slope / unit }));
-
-type Legs = Pick<ContactModel, 'passId' | 'faceId' | 'receive' | 'transmit'>;
-
-/** An option in the shape that scores are computed on. */
-export const legsOf = (option: Option): Legs => ({
-  passId: option.pass.id,
-  faceId: option.faceId,
-  receive: { channelId: '', fromMs: option.receive.fromMs, toMs: option.receive.toMs },
-  transmit: option.transmit && {
-    channelId: '',
-    fromMs: option.transmit.fromMs,
-    toMs: option.transmit.toMs,
-  },
-});
 
 /** A demand by amounts, or nothing when the fixed contacts give it already. */
 export interface Asked {

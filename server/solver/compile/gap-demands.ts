@@ -3,7 +3,7 @@ import type { ContactModel, RequirementModel } from '../../../shared/schedule/mo
 import type { makeQualifier } from '../../../shared/schedule/score/qualifying.ts';
 import { MINUTE_MS, SECOND_MS, type Interval } from '../../../shared/time.ts';
 import type { Demand } from '../model/assignment.ts';
-import { legsOf } from './demands.ts';
+import { legsOf } from './option-legs.ts';
 import type { Option } from './options.ts';
 
 /** Price of one stretch of the largest gap's length without a contact. */

@@ -19,8 +19,10 @@ export interface Option {
   receive: OptionLeg;
   transmit: OptionLeg | null;
   uplinkWanted: boolean;
-  /** The contact of the current plan that this option leaves as it is. */
+  /** The contact of the current plan whose times and face this option keeps. */
   keeps: ContactModel | null;
+  /** It keeps the channels as well, as far as they can be told apart. */
+  sameChannels: boolean;
 }
 
 export interface OptionSetting {
@@ -98,7 +100,7 @@ function optionsOfReceive(
 ): Option[] {
   const { faceId } = receive.group;
   const uplinkWanted = services.some(({ uplink }) => uplink !== 'none');
-  const base = { pass, faceId, receive, uplinkWanted, keeps: null };
+  const base = { pass, faceId, receive, uplinkWanted, keeps: null, sameChannels: false };
   const uplinks = uplinkWanted ? uplinksWithin(setting, pass, satellite, faceId, receive) : [];
   const transmits: (OptionLeg | null)[] = [null, ...uplinks];
   return transmits
@@ -136,39 +138,49 @@ export function optionsOfPass(setting: OptionSetting, pass: PassModel): Option[]
   );
 }
 
-/** The option that leaves a contact of the current plan exactly as it is; null when it cannot stay so. */
-export function optionKeeping(
+/** Groups on which a leg of a current contact could stay at its times; a receive leg may overhang by the guard time. */
+function placesFor(
   setting: OptionSetting,
   contact: ContactModel,
-  guardMs: number,
-): Option | null {
-  const { context, fixed, groups } = setting;
+  direction: ChannelGroup['direction'],
+  overhangMs: number,
+): OptionLeg[] {
+  const { context, fixed } = setting;
+  const leg = direction === 'receive' ? contact.receive : contact.transmit;
   const pass = context.passes.get(contact.passId);
   const satellite = pass && context.satellites.get(pass.satelliteId);
-  if (!pass || !satellite) return null;
-  const legOn = (
-    leg: ContactModel['receive'],
-    direction: ChannelGroup['direction'],
-    overhangMs: number,
-  ): OptionLeg | null => {
-    const radio = radioFor(satellite, direction);
-    const group = groups.find(({ channels }) => channels.some(({ id }) => id === leg.channelId));
-    if (!group || !radio || group.direction !== direction || group.faceId !== contact.faceId)
-      return null;
-    if (!group.channels.some((channel) => fitsChannel(channel, radio))) return null;
+  if (!leg || !pass || !satellite) return [];
+  return groupsFor(setting, contact.faceId, direction, satellite).flatMap((group) => {
     const inside = context.windowsOf(pass.id, contact.faceId, direction).some((window) => {
       const span = { fromMs: window.fromMs - overhangMs, toMs: window.toMs + overhangMs };
       const question = { group, pass, satellite, span };
       return openPieces(context, fixed, question).some((piece) => contains(piece, leg));
     });
-    return inside ? { group, fromMs: leg.fromMs, toMs: leg.toMs } : null;
-  };
-  const receive = legOn(contact.receive, 'receive', guardMs);
-  const transmit = contact.transmit && legOn(contact.transmit, 'transmit', 0);
-  if (!receive || (contact.transmit && !transmit)) return null;
-  if (transmit && !contains(receive, transmit)) return null;
-  const services = servicesOf(context.day, pass);
-  if (!serves(services, receive, transmit)) return null;
-  const uplinkWanted = services.some(({ uplink }) => uplink !== 'none');
-  return { pass, faceId: contact.faceId, receive, transmit, uplinkWanted, keeps: contact };
+    return inside ? [{ group, fromMs: leg.fromMs, toMs: leg.toMs }] : [];
+  });
+}
+
+const holds = ({ group }: OptionLeg, channelId: string | undefined): boolean =>
+  group.channels.some(({ id }) => id === channelId);
+
+/** Options that leave a contact of the current plan at its times on its face; empty when it cannot stay so. */
+export function optionsKeeping(
+  setting: OptionSetting,
+  contact: ContactModel,
+  guardMs: number,
+): Option[] {
+  const { receive: downlink, transmit: uplink, faceId } = contact;
+  const pass = setting.context.passes.get(contact.passId);
+  if (!pass) return [];
+  const services = servicesOf(setting.context.day, pass);
+  if (!serves(services, downlink, uplink) || (uplink && !contains(downlink, uplink))) return [];
+  const uplinkWanted = services.some((service) => service.uplink !== 'none');
+  const uplinks = uplink ? placesFor(setting, contact, 'transmit', 0) : [null];
+  return placesFor(setting, contact, 'receive', guardMs).flatMap((receive) =>
+    uplinks.map((transmit) => {
+      const same =
+        holds(receive, downlink.channelId) && (!transmit || holds(transmit, uplink?.channelId));
+      return { pass, faceId, receive, transmit, uplinkWanted, keeps: contact, sameChannels: same };
+    }),
+  );
 }

@@ -65,6 +65,8 @@ export interface Demand {
   amounts: number[];
   least: number;
   pieces: ShortfallPiece[];
+  /** The whole price falls due as soon as anything is missing. */
+  whole?: boolean;
 }
 
 /** Never more than so much. */
@@ -84,12 +86,19 @@ export interface Assignment {
   maximums: Maximum[];
 }
 
+/** What a shortfall variable costs when it stands at its upper bound's unit: a whole demand has one that is 0 or 1. */
+export const pieceCost = ({ whole }: Pick<Demand, 'whole'>, piece: ShortfallPiece): number =>
+  whole ? piece.size * piece.cost : piece.cost;
+
 /** Price of a demand that gets `given` of what it asks. */
-export function shortfallCost(demand: Pick<Demand, 'least' | 'pieces'>, given: number): number {
+export function shortfallCost(
+  demand: Pick<Demand, 'least' | 'pieces' | 'whole'>,
+  given: number,
+): number {
   let missing = Math.max(0, demand.least - given);
   let cost = 0;
   for (const piece of demand.pieces) {
-    const part = Math.min(missing, piece.size);
+    const part = demand.whole && missing > 1e-9 ? piece.size : Math.min(missing, piece.size);
     cost += part * piece.cost;
     missing -= part;
   }

@@ -34,9 +34,7 @@ const ANSWERS: Readonly<Record<number, ProgramAnswer['status']>> = {
 const FEASIBLE = 2;
 
 function create(highs: Highs, { program, objective }: ProgramRun): Model {
-  const { variables, binaries } = program;
-  const integrality = new Int32Array(variables);
-  integrality.fill(1, 0, binaries);
+  const { variables, integrality } = program;
   return highs.createModel({
     numCols: variables,
     numRows: program.rowLower.length,

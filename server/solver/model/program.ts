@@ -6,6 +6,8 @@ export interface Program {
   binaries: number;
   variables: number;
   upper: Float64Array;
+  /** 1 where a variable must be whole. */
+  integrality: Int32Array;
   rowLower: Float64Array;
   rowUpper: Float64Array;
   starts: Int32Array;
@@ -62,16 +64,20 @@ export function makeProgram(
   const binaries = assignment.columns.length;
   const writer = new RowWriter();
   const upper: number[] = assignment.columns.map(() => 1);
+  const integrality: number[] = assignment.columns.map(() => 1);
   const firstPiece: number[] = [];
   for (const row of rows) writer.add(row.members, row.coefficients, -Infinity, row.limit);
   for (const demand of assignment.demands) {
     const first = upper.length;
     firstPiece.push(first);
-    for (const piece of demand.pieces) upper.push(piece.size);
+    for (const piece of demand.pieces) {
+      upper.push(demand.whole ? 1 : piece.size);
+      integrality.push(demand.whole ? 1 : 0);
+    }
     const pieces = demand.pieces.map((_, index) => first + index);
     writer.add(
       [...demand.members, ...pieces],
-      [...demand.amounts, ...pieces.map(() => 1)],
+      [...demand.amounts, ...demand.pieces.map(({ size }) => (demand.whole ? size : 1))],
       demand.least,
       Infinity,
     );
@@ -81,6 +87,7 @@ export function makeProgram(
     binaries,
     variables: upper.length,
     upper: Float64Array.from(upper),
+    integrality: Int32Array.from(integrality),
     firstPiece,
     ...writer.finish(),
   };
@@ -100,8 +107,8 @@ export function startValues(
       given += (values[member] ?? 0) * (demand.amounts[position] ?? 0);
     let missing = Math.max(0, demand.least - given);
     for (const [position, { size }] of demand.pieces.entries()) {
-      const part = Math.min(missing, size);
-      values[(program.firstPiece[index] ?? 0) + position] = part;
+      const part = demand.whole && missing > 1e-9 ? size : Math.min(missing, size);
+      values[(program.firstPiece[index] ?? 0) + position] = demand.whole ? part / size : part;
       missing -= part;
     }
   }
