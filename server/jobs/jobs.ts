@@ -58,9 +58,27 @@ export class Jobs {
     );
   }
 
+  /** Queues the job and resolves with the run's id when its row is written. */
   async start(wish: Wish, job: Job): Promise<string> {
     const id = wish.id ?? randomUUID();
-    await inTransaction(this.#deps, async ({ em, nowMs, tell }) => {
+    const controller = new AbortController();
+    const written = this.#insert(id, wish);
+    const before = this.#queues.get(wish.kind) ?? Promise.resolve();
+    const done = before
+      .then(() => written)
+      .then(
+        () => this.#execute(id, controller.signal, job),
+        () => undefined,
+      )
+      .finally(() => this.#live.delete(id));
+    this.#queues.set(wish.kind, done);
+    this.#live.set(id, { controller, done });
+    await written;
+    return id;
+  }
+
+  #insert(id: string, wish: Wish): Promise<void> {
+    return inTransaction(this.#deps, async ({ em, nowMs, tell }) => {
       em.create(RunRow, {
         id,
         kind: wish.kind,
@@ -74,12 +92,6 @@ export class Jobs {
       await em.flush();
       tell({ topic: 'run', id, version: 1 });
     });
-    const controller = new AbortController();
-    const before = this.#queues.get(wish.kind) ?? Promise.resolve();
-    const done = before.then(() => this.#execute(id, controller.signal, job));
-    this.#queues.set(wish.kind, done);
-    this.#live.set(id, { controller, done });
-    return id;
   }
 
   async cancel(id: string): Promise<void> {
@@ -110,8 +122,6 @@ export class Jobs {
       else await this.#run(id, signal, job);
     } catch (error) {
       this.#deps.log.error({ err: error, runId: id }, 'a run could not be recorded');
-    } finally {
-      this.#live.delete(id);
     }
   }
 

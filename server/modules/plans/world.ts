@@ -17,8 +17,8 @@ export interface World {
 
 type DayOfStation = Pick<DayPlan, 'day' | 'limitOfDayDb'> & { station: { id: string } };
 
-/** Days in a planner's hands at one time. */
-const KEPT = 6;
+/** A pass list over the whole prediction span touches twelve days. */
+const KEPT = 16;
 
 /**
  * The world of a day, kept until something changes that it depends on: passes, fleet, station, closures (told by
