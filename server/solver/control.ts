@@ -4,4 +4,6 @@ export interface RunControl {
   now: () => number;
   shouldStop: () => boolean;
   onIncumbent: (columns: number[]) => void;
+  /** How far the run is, 0 to 1, and what it does now. */
+  onStep?: (fraction: number, step: string) => void;
 }

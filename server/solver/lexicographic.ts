@@ -108,6 +108,7 @@ class Phases {
     objective: (program: Program) => Float64Array,
     share: number,
     relativeGap: number,
+    onIncumbent: (values: Float64Array) => void = () => undefined,
   ): Promise<ProgramAnswer> {
     const program = makeProgram(this.assignment, this.rows, this.held);
     return solveProgram({
@@ -117,7 +118,7 @@ class Phases {
       timeLimitSeconds: Math.max(0.1, this.secondsLeft() * share),
       relativeGap,
       shouldStop: this.control.shouldStop,
-      onIncumbent: () => undefined,
+      onIncumbent,
     });
   }
 
@@ -187,6 +188,7 @@ class Phases {
       },
       1,
       gap,
+      (values) => this.control.onIncumbent(chosenOf(values, this.assignment.columns.length)),
     );
     this.adopt(answer, (columns) => valueOf(this.assignment, columns));
     return answer;
@@ -211,12 +213,17 @@ export async function solveLexicographic(
   const levels = [...new Set(assignment.demands.map(({ level }) => level))].sort((a, b) => a - b);
   const problem = searchProblem(assignment, rows, searchWeight(levels));
   const seconds = startSeconds(assignment.columns.length, limitSeconds);
+  control.onStep?.(0.1, 'Searching a first plan');
   const start = findStart(problem, given, seconds, control);
   const phases = new Phases(assignment, rows, start, control, deadline);
   if (assignment.columns.length === 0)
     return { columns: [], value: 0, valueBound: 0, levels: [], bySolver: true, status: 'optimal' };
   const gap = assignment.columns.length > FINE_GAP_COLUMNS ? 1e-4 : 1e-7;
-  for (const level of levels) await phases.settle(level, gap);
+  for (const [index, level] of levels.entries()) {
+    control.onStep?.(0.2 + (0.4 * index) / levels.length, 'Meeting what is asked');
+    await phases.settle(level, gap);
+  }
+  control.onStep?.(0.6, 'Proving the best plan');
   const answer = await phases.maximise(gap);
   return {
     columns: phases.columns,

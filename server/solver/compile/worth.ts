@@ -2,7 +2,8 @@ import { faceAxes } from '../../../shared/array/face-geometry.ts';
 import { scanLossDb } from '../../../shared/array/scan-loss.ts';
 import { directionAt } from '../../../shared/orbit/track.ts';
 import type { PlanContext } from '../../../shared/schedule/context.ts';
-import type { FaceModel, PassModel } from '../../../shared/schedule/model.ts';
+import { servicesOf } from '../../../shared/schedule/services.ts';
+import type { ContactModel, FaceModel, PassModel } from '../../../shared/schedule/model.ts';
 import { SECOND_MS, type Interval } from '../../../shared/time.ts';
 import { dot } from '../../../shared/vector.ts';
 
@@ -54,4 +55,12 @@ export function worthOf(context: PlanContext, question: WorthQuestion): number {
   const quality = face ? QUALITY_SHARE * qualitySeconds(face, pass, receive) : 0;
   const bonus = question.unchanged ? UNCHANGED_BONUS : 0;
   return weight * (seconds(receive) + uplink + quality) + bonus;
+}
+
+/** Worth of a contact that stands. */
+export function contactWorth(context: PlanContext, contact: ContactModel): number {
+  const pass = context.passes.get(contact.passId);
+  if (!pass) return 0;
+  const uplinkWanted = servicesOf(context.day, pass).some(({ uplink }) => uplink !== 'none');
+  return worthOf(context, { ...contact, pass, uplinkWanted, unchanged: true });
 }
