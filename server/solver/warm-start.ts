@@ -25,6 +25,13 @@ export function findStart(
   });
 }
 
-/** How long the search may run before the solver takes over: small models do not need it. */
+/** How long the search may run before the solver takes over, by the number of columns: small models do not need it. */
+const START_SECONDS: readonly [number, number][] = [
+  [200, 0.02],
+  [2000, 0.15],
+  [8000, 0.4],
+  [Infinity, 1],
+];
+
 export const startSeconds = (columns: number, limitSeconds: number): number =>
-  Math.min(limitSeconds / 5, columns < 2000 ? 0.15 : columns < 8000 ? 0.4 : 1);
+  Math.min(limitSeconds / 5, START_SECONDS.find(([upTo]) => columns < upTo)?.[1] ?? 1);
