@@ -19,7 +19,7 @@ export function tinyInstance(seed: number): BeamAssignInstance {
     channels: whole(random, 1, 2),
     setup: whole(random, 0, 3),
     teardown: whole(random, 0, 2),
-    closed: (random() < 0.3 ? [[20, 26]] : []),
+    closed: random() < 0.3 ? shut : [],
   }));
   const passes = Array.from({ length: whole(random, 2, 6) }, (_, index) => ({
     id: `P${index}`,
@@ -67,6 +67,8 @@ export function tinyInstance(seed: number): BeamAssignInstance {
     locks: [],
   };
 }
+
+const shut: [number, number][] = [[20, 26]];
 
 function demands(random: Random): BeamAssignInstance['demands'] {
   return ['M0', 'M1']
