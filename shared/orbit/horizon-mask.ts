@@ -1,11 +1,12 @@
 import { toRadians, wrapDegrees } from '../units.ts';
 import type { HorizonMask } from './pass.ts';
 
-/** A horizon mask made ready for search: knots in rad around the circle, and its range. */
+/** A horizon mask made ready for search: knots in rad around the circle, and its lowest elevation. */
 export interface MaskProfile {
   isUniform: boolean;
   lowestRad: number;
-  highestRad: number;
+  sinLowest: number;
+  cosLowest: number;
   /** Largest slope, rad of elevation per rad of azimuth. */
   steepestSlope: number;
   /** Ascending, rad in [0, 2 pi); empty for a uniform mask. */
@@ -20,7 +21,8 @@ const uniform = (elevationDeg: number): MaskProfile => {
   return {
     isUniform: true,
     lowestRad: elevation,
-    highestRad: elevation,
+    sinLowest: Math.sin(elevation),
+    cosLowest: Math.cos(elevation),
     steepestSlope: 0,
     azimuthsRad: [],
     elevationsRad: [],
@@ -37,10 +39,12 @@ export function maskProfile(mask: HorizonMask): MaskProfile {
     const [nextDeg, nextElevationDeg] = mask[(index + 1) % mask.length] ?? [0, 0];
     return Math.abs(nextElevationDeg - elevationDeg) / (wrapDegrees(nextDeg - azimuthDeg) || 360);
   });
+  const lowestRad = Math.min(...elevationsRad);
   return {
     isUniform: false,
-    lowestRad: Math.min(...elevationsRad),
-    highestRad: Math.max(...elevationsRad),
+    lowestRad,
+    sinLowest: Math.sin(lowestRad),
+    cosLowest: Math.cos(lowestRad),
     steepestSlope: Math.max(...slopes),
     azimuthsRad: mask.map(([azimuthDeg]) => toRadians(wrapDegrees(azimuthDeg))),
     elevationsRad,
@@ -48,7 +52,7 @@ export function maskProfile(mask: HorizonMask): MaskProfile {
 }
 
 /** Index of the knot at or before an azimuth, rad in [0, 2 pi), around north: -1 stands for the last knot. */
-export function knotBefore(profile: MaskProfile, azimuthRad: number): number {
+function knotBefore(profile: MaskProfile, azimuthRad: number): number {
   const { azimuthsRad } = profile;
   let [low, high] = [-1, azimuthsRad.length];
   while (high - low > 1) {
@@ -59,13 +63,12 @@ export function knotBefore(profile: MaskProfile, azimuthRad: number): number {
   return low;
 }
 
-/** Elevation of the mask at an azimuth, rad, and its slope there (rad of elevation per rad of azimuth). */
+/** Elevation of a mask with knots at an azimuth, rad, and its slope there (rad of elevation per rad of azimuth). */
 export function maskAt(
   profile: MaskProfile,
   azimuthRad: number,
 ): { elevation: number; slope: number } {
-  const { azimuthsRad, elevationsRad, lowestRad } = profile;
-  if (profile.isUniform) return { elevation: lowestRad, slope: 0 };
+  const { azimuthsRad, elevationsRad } = profile;
   const azimuth = azimuthRad < 0 ? azimuthRad + TURN_RAD : azimuthRad;
   const count = azimuthsRad.length;
   const index = knotBefore(profile, azimuth);

@@ -43,7 +43,8 @@ function checkObserver(observer: Observer): void {
 
 const isMaskElevation = (deg: number): boolean => deg >= -20 && deg < 90;
 
-function checkMask(mask: HorizonMask): void {
+/** Throws an `OrbitInputError` for a mask that is no function of azimuth. */
+export function checkMask(mask: HorizonMask): void {
   if (typeof mask === 'number') {
     requireInput(isMaskElevation(mask), 'mask', `${mask} is not between -20 and 90 deg.`);
     return;

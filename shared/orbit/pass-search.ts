@@ -6,8 +6,9 @@ import type { PassQuery, PassSearchResult, PredictedPass } from './pass.ts';
 import { checkPassQuery } from './pass-query.ts';
 import { makeOrbit, type Orbit } from './propagation.ts';
 import { boundsOf } from './search/approximation-bounds.ts';
-import { arcsOf, LONGEST_ARC_MS, OrbitLost } from './search/arcs.ts';
+import { arcsOf, exactState, LONGEST_ARC_MS, OrbitLost } from './search/arcs.ts';
 import { elevationExtremes } from './search/extremes.ts';
+import { inertialNode, type Node } from './search/node.ts';
 import { isInDanger, orbitSpan } from './search/orbit-span.ts';
 import { passesOfRun } from './search/run-passes.ts';
 import { sweep } from './search/sweep.ts';
@@ -35,7 +36,8 @@ function attempt(
   if (!isWalked && isInDanger(orbit, arcs)) throw new OrbitLost(toMs, 0);
   const frame = horizonFrame(query.observer);
   const profile = maskProfile(query.mask);
-  const search = { orbit, frame, profile, fromMs, toMs, ...boundsOf(first), violations: 0 };
+  const exactAt = (ms: number): Node => inertialNode(exactState(orbit, ms), frame, ms);
+  const search = { exactAt, frame, profile, fromMs, toMs, ...boundsOf(first), violations: 0 };
   const passes = sweep(arcs, frame, profile).flatMap((run) =>
     passesOfRun(search, run, elevationExtremes(run)),
   );

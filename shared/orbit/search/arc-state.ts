@@ -32,25 +32,27 @@ export function arcStateAt(arc: Arc, longitude: number): ArcState {
   return stateAtTime(arc, timeOfLongitude(arc, longitude, cos, sin), cos, sin);
 }
 
-/** As `arcStateAt`, at a known time of the arc. */
-export function stateAtTime(arc: Arc, x: number, cos: number, sin: number): ArcState {
-  const [h, k] = [valueAt(arc.h, x), valueAt(arc.k, x)];
-  const axisKm = valueAt(arc.axisKm, x);
-  const eccentricitySquared = h * h + k * k;
-  const beta = Math.sqrt(1 - eccentricitySquared);
-  const b = 1 / (1 + beta);
-  const alongFirst = axisKm * ((1 - h * h * b) * cos + h * k * b * sin - k);
-  const alongSecond = axisKm * ((1 - k * k * b) * sin + h * k * b * cos - h);
-  const radiusKm = axisKm * (1 - k * cos - h * sin);
-  const [c, s] = [alongFirst / radiusKm, alongSecond / radiusKm];
+/** Unit vectors outward, ahead and normal to the plane, along the axes of the Earth. */
+interface Triad {
+  ox: number;
+  oy: number;
+  oz: number;
+  ax: number;
+  ay: number;
+  az: number;
+  nx: number;
+  ny: number;
+  nz: number;
+}
 
+/** The triad where the true longitude has a cosine and sine: tilted within the arc's frame, then the frame itself. */
+function triadAt(arc: Arc, x: number, cos: number, sin: number): Triad {
   const [p, q] = [valueAt(arc.p, x), valueAt(arc.q, x)];
   const size = 1 / (1 + p * p + q * q);
   const [f1, f2, f3] = [(1 - p * p + q * q) * size, 2 * p * q * size, -2 * p * size];
   const [g1, g2, g3] = [f2, (1 + p * p - q * q) * size, 2 * q * size];
-  // Outward and ahead along the axes of the arc, then along those of the Earth; the normal closes the triad.
-  const [o1, o2, o3] = [c * f1 + s * g1, c * f2 + s * g2, c * f3 + s * g3];
-  const [a1, a2, a3] = [c * g1 - s * f1, c * g2 - s * f2, c * g3 - s * f3];
+  const [o1, o2, o3] = [cos * f1 + sin * g1, cos * f2 + sin * g2, cos * f3 + sin * g3];
+  const [a1, a2, a3] = [cos * g1 - sin * f1, cos * g2 - sin * f2, cos * g3 - sin * f3];
   const [e1, e2, e3] = arc.frame;
   const ox = o1 * e1[0] + o2 * e2[0] + o3 * e3[0];
   const oy = o1 * e1[1] + o2 * e2[1] + o3 * e3[1];
@@ -59,27 +61,33 @@ export function stateAtTime(arc: Arc, x: number, cos: number, sin: number): ArcS
   const ay = a1 * e1[1] + a2 * e2[1] + a3 * e3[1];
   const az = a1 * e1[2] + a2 * e2[2] + a3 * e3[2];
   const [nx, ny, nz] = [oy * az - oz * ay, oz * ax - ox * az, ox * ay - oy * ax];
+  return { ox, oy, oz, ax, ay, az, nx, ny, nz };
+}
+
+/** As `arcStateAt`, at a known time of the arc. */
+export function stateAtTime(arc: Arc, x: number, cos: number, sin: number): ArcState {
+  const [h, k, axisKm] = [valueAt(arc.h, x), valueAt(arc.k, x), valueAt(arc.axisKm, x)];
+  const eccentricitySquared = h * h + k * k;
+  const beta = Math.sqrt(1 - eccentricitySquared);
+  const b = 1 / (1 + beta);
+  const radiusKm = axisKm * (1 - k * cos - h * sin);
+  const trueCos = (axisKm * ((1 - h * h * b) * cos + h * k * b * sin - k)) / radiusKm;
+  const trueSin = (axisKm * ((1 - k * k * b) * sin + h * k * b * cos - h)) / radiusKm;
+  const { ox, oy, oz, ax, ay, az, nx, ny, nz } = triadAt(arc, x, trueCos, trueSin);
 
   const parameterKm = axisKm * beta * beta;
-  const periodics = j2Periodics({
-    parameterKm,
-    eccentricitySquared,
-    outwardZ: oz,
-    aheadZ: az,
-    normalZ: nz,
-  });
+  const place = { parameterKm, eccentricitySquared, outwardZ: oz, aheadZ: az, normalZ: nz };
+  const periodics = j2Periodics(place);
   const { towardsAhead: ta, towardsNormal: tn, twist } = periodics;
   const r = radiusKm * periodics.radiusFactor + periodics.radiusShiftKm;
-  const radial =
-    (Math.sqrt(SGP4_MU * axisKm) * (k * sin - h * cos)) / radiusKm + periodics.radialKmS;
+  const meanRadial = (Math.sqrt(SGP4_MU * axisKm) * (k * sin - h * cos)) / radiusKm;
+  const radial = meanRadial + periodics.radialKmS;
   const transverse = Math.sqrt(SGP4_MU * parameterKm) / radiusKm + periodics.transverseKmS;
-  // The periodics turn the triad: outward to u, ahead to w.
+  // The periodics turn the triad: outward becomes u, ahead becomes w.
   const [ux, uy, uz] = [ox + ta * ax + tn * nx, oy + ta * ay + tn * ny, oz + ta * az + tn * nz];
-  const [wx, wy, wz] = [
-    ax - ta * ox + twist * nx,
-    ay - ta * oy + twist * ny,
-    az - ta * oz + twist * nz,
-  ];
+  const wx = ax - ta * ox + twist * nx;
+  const wy = ay - ta * oy + twist * ny;
+  const wz = az - ta * oz + twist * nz;
   return {
     ms: arc.middleMs + x * arc.halfMs,
     driftRad: (arc.driftRadS * arc.halfMs * x) / 1000,

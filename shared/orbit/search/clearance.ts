@@ -10,18 +10,23 @@ export interface Clearance {
   kmS: number;
 }
 
+/** Keeps rates finite exactly at the zenith. */
+const LEAST_ACROSS_KM = 1e-9;
+
 export function clearanceOf(profile: MaskProfile, state: HorizonState): Clearance {
-  const { eastKm, northKm, upKm, upKmS } = state;
-  const acrossKm = Math.sqrt(eastKm * eastKm + northKm * northKm);
-  const acrossKmS = (eastKm * state.eastKmS + northKm * state.northKmS) / acrossKm;
-  const azimuth = profile.isUniform ? 0 : Math.atan2(eastKm, northKm);
-  const { elevation, slope } = maskAt(profile, azimuth);
+  const { eastKm, northKm, eastKmS, northKmS, upKm, upKmS } = state;
+  const acrossKm = Math.sqrt(eastKm * eastKm + northKm * northKm) || LEAST_ACROSS_KM;
+  const acrossKmS = (eastKm * eastKmS + northKm * northKmS) / acrossKm;
+  if (profile.isUniform) {
+    const { sinLowest, cosLowest } = profile;
+    const km = upKm * cosLowest - acrossKm * sinLowest;
+    return { km, kmS: upKmS * cosLowest - acrossKmS * sinLowest };
+  }
+  const { elevation, slope } = maskAt(profile, Math.atan2(eastKm, northKm));
   const [sin, cos] = [Math.sin(elevation), Math.cos(elevation)];
-  const km = upKm * cos - acrossKm * sin;
-  const straight = upKmS * cos - acrossKmS * sin;
-  if (slope === 0) return { km, kmS: straight };
-  const azimuthRate = (northKm * state.eastKmS - eastKm * state.northKmS) / (acrossKm * acrossKm);
-  return { km, kmS: straight - (upKm * sin + acrossKm * cos) * slope * azimuthRate };
+  const azimuthRate = (northKm * eastKmS - eastKm * northKmS) / (acrossKm * acrossKm);
+  const turning = (upKm * sin + acrossKm * cos) * slope * azimuthRate;
+  return { km: upKm * cos - acrossKm * sin, kmS: upKmS * cos - acrossKmS * sin - turning };
 }
 
 /**

@@ -1,14 +1,13 @@
 import type { MaskProfile } from '../horizon-mask.ts';
 import type { HorizonFrame } from '../observer.ts';
-import type { Orbit } from '../propagation.ts';
 import type { HorizonState } from '../track.ts';
-import { exactState } from './arcs.ts';
-import { inertialNode, type Node } from './node.ts';
+import type { Node } from './node.ts';
 import { approximateState, type Run } from './run.ts';
 
 /** What a search works with. */
 export interface Search {
-  orbit: Orbit;
+  /** The truth, at an instant: one SGP4 call. */
+  exactAt: (ms: number) => Node;
   frame: HorizonFrame;
   profile: MaskProfile;
   /** The window, or the part of it in which the orbit exists. */
@@ -26,9 +25,9 @@ export interface Search {
 const distanceKm = (a: HorizonState, b: HorizonState): number =>
   Math.hypot(a.eastKm - b.eastKm, a.northKm - b.northKm, a.upKm - b.upKm);
 
-/** SGP4's own state at an instant: one call, and the check of the guard. */
+/** The exact state at an instant, and the check of the guard. */
 export function exactNode(search: Search, run: Run, ms: number): Node {
-  const node = inertialNode(exactState(search.orbit, ms), search.frame, ms);
+  const node = search.exactAt(ms);
   if (distanceKm(node, approximateState(run, ms)) > search.guardKm) search.violations += 1;
   return node;
 }
