@@ -11,6 +11,7 @@ export default defineConfig({
     // satellite.js 7 imports WebAssembly builds that only its bulk interface needs; bundling them breaks `vite build`.
     alias: { '#wasm-single-thread': empty, '#wasm-multi-thread': empty },
   },
+  publicDir: 'src/public',
   build: { outDir: 'dist/client', emptyOutDir: true, chunkSizeWarningLimit: 700 },
   server: {
     host: '127.0.0.1',
