@@ -24,6 +24,8 @@ export interface TestApp extends SmallWorld {
   clock: SettableClock;
   /** A browser of that person, signed in. */
   as(who: Who): Promise<TestAgent>;
+  /** Sets the clock; who was signed in has to sign in again. */
+  at(nowMs: number): void;
   /** A browser of nobody. */
   anyone(): TestAgent;
   close(): Promise<void>;
@@ -54,6 +56,10 @@ export const startTestApp = async (nowMs = NOW): Promise<TestApp> => {
     app,
     deps,
     clock,
+    at: (nowMs) => {
+      clock.set(nowMs);
+      agents.clear();
+    },
     anyone: () => request.agent(app.http),
     as: async (who) => {
       const known = agents.get(who);

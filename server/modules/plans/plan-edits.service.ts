@@ -168,9 +168,9 @@ export const editPlan = async (
       violation.contactIds.some((id) => edited.touched.has(id)),
     );
     if (wish.dryRun) return { plan, edited, removedIds, violations };
-    refuseOtherDay(plan, edited);
-    refuseFrozen({ world, nowMs: work.nowMs }, before, edited);
     if (violations.length > 0) throw ruleBroken(violations.map(presentViolation));
+    refuseFrozen({ world, nowMs: work.nowMs }, before, edited);
+    refuseOtherDay(plan, edited);
     await storeContacts(work, plan, { world, wished: edited.contacts });
     await audit(work, person, {
       action: 'plan.edit',
