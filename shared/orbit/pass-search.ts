@@ -37,7 +37,15 @@ function attempt(
   const frame = horizonFrame(query.observer);
   const profile = maskProfile(query.mask);
   const exactAt = (ms: number): Node => inertialNode(exactState(orbit, ms), frame, ms);
-  const search = { exactAt, frame, profile, fromMs, toMs, ...boundsOf(first), violations: 0 };
+  const search = {
+    exactAt,
+    frame,
+    profile,
+    fromMs,
+    toMs,
+    ...boundsOf(first, isWalked),
+    violations: 0,
+  };
   const passes = sweep(arcs, frame, profile).flatMap((run) =>
     passesOfRun(search, run, elevationExtremes(run)),
   );

@@ -12,8 +12,9 @@ import { contactOf, legOn, windowOf } from '../support/schedule/plan-builder.ts'
 /** A crowded day cut down to a few overlapping passes, one contact asked of each satellite, nothing else. */
 function tinyDay(seed: number): { day: DayModel; context: PlanContext } {
   const { day, facts } = crowdedDay(seed);
-  const first = day.passes[Math.floor((seed % 7) * 1.5)] ?? day.passes[0];
-  const passes = day.passes
+  const ofDay = day.passes.filter(({ fromMs }) => fromMs >= day.day.fromMs);
+  const first = ofDay[Math.floor((seed % 7) * 1.5)] ?? ofDay[0];
+  const passes = ofDay
     .filter(({ fromMs }) => first && Math.abs(fromMs - first.fromMs) < 45 * 60_000)
     .slice(0, 5);
   const requirements = day.missions.flatMap(({ id }) =>

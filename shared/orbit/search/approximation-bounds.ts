@@ -16,17 +16,21 @@ const ECCENTRIC_GUARD_KM = 2.5;
  * 0.05, 1.1 at 0.1, 2.3 at 0.3, 2.8 at 0.5, 4.8 at 0.9 (perigee 250 km).
  */
 const VELOCITY_ERROR_KM_S = { circular: 1e-4, eccentric: 0.012, most: 0.005 };
+/** In the last revolutions drag changes the position in ways the velocity does not know. */
+const SINKING_VELOCITY_ERROR_KM_S = 0.02;
 /** Part of a revolution over which an acceleration carries a state: 0.5 s near Earth, where the jerk makes 0.2 mm. */
 const REACH_OF_PERIOD = 1e-4;
 
-/** How far the approximation of an orbit may be trusted. */
-export function boundsOf(arc: Arc): ApproximationBounds {
+/** How far the approximation of an orbit may be trusted; `mayEnd` for one that drag brings down. */
+export function boundsOf(arc: Arc, mayEnd: boolean): ApproximationBounds {
   const axisKm = arc.axisKm[0];
   const eccentricity = Math.hypot(arc.h[0], arc.k[0]);
   const { circular, eccentric, most } = VELOCITY_ERROR_KM_S;
   return {
     guardKm: GUARD_KM + ECCENTRIC_GUARD_KM * eccentricity,
-    velocityErrorKmS: Math.min(most, circular + eccentric * eccentricity),
+    velocityErrorKmS: mayEnd
+      ? SINKING_VELOCITY_ERROR_KM_S
+      : Math.min(most, circular + eccentric * eccentricity),
     reachS: REACH_OF_PERIOD * 2 * Math.PI * Math.sqrt(axisKm ** 3 / SGP4_MU),
   };
 }
