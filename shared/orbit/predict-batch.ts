@@ -1,8 +1,9 @@
 import { OrbitInputError } from './input-error.ts';
-import { makeTrack } from './make-track.ts';
+import { trackOf } from './make-track.ts';
+import { horizonFrame } from './observer.ts';
 import type { PassQuery, PassSearchResult, PredictedPass } from './pass.ts';
 import { searchPasses } from './pass-search.ts';
-import type { ElementLines } from './propagation.ts';
+import { makeOrbit, type ElementLines } from './propagation.ts';
 import type { Track } from './track.ts';
 
 export interface PassWithTrack extends PredictedPass {
@@ -21,10 +22,11 @@ export type BatchItem<Id> =
 /** The passes of one satellite with their tracks. Throws as `searchPasses`. */
 export function predictSatellite(query: PassQuery): SatellitePrediction {
   const found = searchPasses(query);
-  const { elements, observer } = query;
-  const passes = found.passes
-    .filter(({ aosMs, losMs }) => losMs > aosMs)
-    .map((pass) => ({ ...pass, track: makeTrack(elements, observer, pass.aosMs, pass.losMs) }));
+  const [orbit, frame] = [makeOrbit(query.elements), horizonFrame(query.observer)];
+  const passes = found.passes.map((pass) => ({
+    ...pass,
+    track: trackOf(orbit, frame, pass.aosMs, pass.losMs),
+  }));
   return { ...found, passes };
 }
 
