@@ -22,6 +22,7 @@ import {
   elementSetsOf,
   setsInUse,
 } from './modules/element-sets/element-set.service.ts';
+import { exportRoutes } from './modules/exports/export.routes.ts';
 import { mailRoutes } from './modules/mail/mail.routes.ts';
 import { missionRoutes } from './modules/missions/mission.routes.ts';
 import { requirementRoutes } from './modules/missions/requirement.routes.ts';
@@ -115,6 +116,7 @@ const allRoutes = (deps: Deps, { jobs, worlds, streams }: Parts): RouteSpec[] =>
   ...planRoutes(deps, worlds),
   ...openPassRoutes(deps, worlds),
   ...planWorkRoutes({ deps, worlds, jobs }),
+  ...exportRoutes(deps, worlds),
   ...eventRoutes(streams),
 ];
 

@@ -36,7 +36,7 @@ function held(
   satellite: SatelliteModel | undefined,
 ): Interval {
   const channel = context.channels.get(leg.channelId);
-  return channel && satellite ? holding(leg, channel, satellite) : leg;
+  return channel ? holding(leg, channel, satellite) : leg;
 }
 
 export function fixedPlan(context: PlanContext, contacts: readonly ContactModel[]): FixedPlan {
