@@ -12,10 +12,10 @@ export const guardMs = (station: StationModel, satellite: SatelliteModel): numbe
 export function holding(
   leg: Pick<LegModel, 'fromMs' | 'toMs'>,
   channel: ChannelModel,
-  satellite: SatelliteModel,
+  satellite: SatelliteModel | undefined,
 ): Interval {
   const uncertainMs =
-    channel.direction === 'receive' ? satellite.timeUncertaintySeconds * SECOND_MS : 0;
+    channel.direction === 'receive' ? (satellite?.timeUncertaintySeconds ?? 0) * SECOND_MS : 0;
   return {
     fromMs: leg.fromMs - uncertainMs - channel.setUpSeconds * SECOND_MS,
     toMs: leg.toMs + uncertainMs + channel.tearDownSeconds * SECOND_MS,

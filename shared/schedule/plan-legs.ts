@@ -37,7 +37,7 @@ function legOf(
   const channel = context.channels.get(leg.channelId);
   const satellite = context.satellites.get(contact.satelliteId);
   const pass = context.passes.get(contact.passId);
-  const held = channel && satellite ? holding(leg, channel, satellite) : leg;
+  const held = channel ? holding(leg, channel, satellite) : leg;
   return { contact, direction, leg, own, channel, satellite, pass, held };
 }
 
