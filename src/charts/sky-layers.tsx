@@ -88,40 +88,43 @@ export function KeepOut({
   );
 }
 
-export function Contours({ ground, labels }: { ground: GroundLayers; labels: boolean }) {
+export function Contours({ ground }: { ground: GroundLayers }) {
   return (
     <g fill="none">
-      {ground.faces.map((face) => (
-        <g key={face.id}>
-          {face.contours.map((contour) => (
-            <path
-              key={contour.lossDb}
-              d={contour.d}
-              stroke={contour.isLimit ? 'var(--ink-muted)' : 'var(--iso)'}
-              strokeWidth={contour.isLimit ? 1.5 : 0.9}
-            />
-          ))}
-          {labels &&
-            face.contours.map((contour) => (
-              <text
-                key={contour.lossDb}
-                x={
-                  (contour.isLimit ? contour.beside : contour.foot)[0] +
-                  (contour.lossDb === 3 ? 40 : 0)
-                }
-                y={contour.isLimit ? contour.beside[1] + 13 : contour.foot[1] + 4}
-                textAnchor={contour.isLimit ? 'end' : 'middle'}
-                fontSize="12"
-                fontWeight={contour.isLimit ? 600 : 400}
-                fill={contour.isLimit ? 'var(--ink)' : 'var(--ink-muted)'}
-                className="halo"
-                style={{ '--halo': contour.isLimit ? 'var(--shade)' : 'var(--sheet)' }}
-              >
-                {contour.isLimit ? `${contour.lossDb} dB, the limit` : `${contour.lossDb} dB`}
-              </text>
-            ))}
-        </g>
-      ))}
+      {ground.faces.flatMap((face) =>
+        face.contours.map((contour) => (
+          <path
+            key={`${face.id} ${contour.lossDb}`}
+            d={contour.d}
+            stroke={contour.isLimit ? 'var(--ink-muted)' : 'var(--iso)'}
+            strokeWidth={contour.isLimit ? 1.5 : 0.9}
+          />
+        )),
+      )}
+    </g>
+  );
+}
+
+/** The values of the contours: on the line, the limit outside it; above the tracks, with a halo. */
+export function ContourLabels({ ground }: { ground: GroundLayers }) {
+  return (
+    <g fontSize="12">
+      {ground.faces.flatMap((face) =>
+        face.contours.map(({ lossDb, isLimit, foot, beside }) => (
+          <text
+            key={`${face.id} ${lossDb}`}
+            x={isLimit ? beside[0] : foot[0] + (lossDb === 3 ? 40 : 0)}
+            y={isLimit ? beside[1] + 13 : foot[1] + 4}
+            textAnchor={isLimit ? 'end' : 'middle'}
+            fontWeight={isLimit ? 600 : 400}
+            fill={isLimit ? 'var(--ink)' : 'var(--ink-muted)'}
+            className="halo"
+            style={{ '--halo': isLimit ? 'var(--shade)' : 'var(--sheet)' }}
+          >
+            {isLimit ? `${lossDb} dB, the limit` : `${lossDb} dB`}
+          </text>
+        )),
+      )}
     </g>
   );
 }

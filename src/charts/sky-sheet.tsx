@@ -3,6 +3,7 @@ import type { SkyGround } from './sky-ground.ts';
 import { HatchPattern } from './hatch.tsx';
 import {
   Centres,
+  ContourLabels,
   Contours,
   DiscAndShade,
   KeepOut,
@@ -68,7 +69,7 @@ export function SkySheet({
           hatchId={`${id}-hatch`}
           words={large ? (radius >= 220 ? 'long' : 'short') : 'none'}
         />
-        <Contours ground={layers} labels={large} />
+        <Contours ground={layers} />
         <Centres ground={layers} size={large ? 1 : 0.7} />
         <path d={layers.land} fill="var(--land)" fillRule="evenodd" />
         <path d={layers.maskEdge} fill="none" stroke="var(--ink-muted)" strokeWidth="0.9" />
@@ -85,6 +86,7 @@ export function SkySheet({
         />
       ))}
       {children}
+      {large && <ContourLabels ground={layers} />}
     </svg>
   );
 }

@@ -6,7 +6,7 @@ export class ApiError extends Error {
   readonly code: string;
   readonly requestId: string | null;
   readonly violations: readonly Violation[];
-  readonly fieldErrors: readonly { pointer: string; detail: string }[];
+  readonly fieldErrors: NonNullable<Problem['errors']>;
 
   constructor(problem: Problem) {
     super(problem.detail || problem.title);

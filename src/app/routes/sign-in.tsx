@@ -37,9 +37,12 @@ export function Component() {
         </p>
         <SignInFoot />
       </main>
-      <div className="hidden min-h-0 border-l border-line bg-raised narrow:block">
+      <aside
+        aria-label="A drawing of the sky"
+        className="hidden min-h-0 border-l border-line bg-raised narrow:block"
+      >
         <SignInDrawing />
-      </div>
+      </aside>
     </div>
   );
 }
