@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { RouteSpec } from '../../server/middleware/route.ts';
-import { createPlan } from '../../server/modules/plans/plan-edits.service.ts';
+import { createPlan } from '../../server/modules/plans/plan-create.service.ts';
 import { mayEver } from '../../shared/policy.ts';
 import type { Who } from '../support/small-world.ts';
 import { predictSmallWorld, startTestApp, type TestApp } from '../support/test-app.ts';

@@ -13,7 +13,7 @@ import { RunRow } from '../runs/run.entity.ts';
 import { confirmPlan } from './confirm.ts';
 import { standingContacts, storeContacts, type WishedContact } from './contact-store.ts';
 import { DayPlan } from './plan.entity.ts';
-import { requireAction, requireTag } from './plan-edits.service.ts';
+import { requireAction, requireTag } from './plan-steps.ts';
 import { getPlan } from './plan-read.service.ts';
 import type { World, Worlds } from './world.ts';
 

@@ -18,15 +18,12 @@ import { route, type Answer } from '../../middleware/route.ts';
 import { tagOf } from '../../middleware/tags.ts';
 import { getStation } from '../stations/station.service.ts';
 import { planChanges } from './plan-changes.ts';
-import { createPlan, setLimitOfDay } from './plan-edits.service.ts';
+import { createPlan, setLimitOfDay } from './plan-create.service.ts';
 import { presentFacts } from './plan-facts.ts';
-import {
-  releasePlan,
-  revisePlan,
-  signPlan,
-  submitPlan,
-  withdrawPlan,
-} from './plan-life.service.ts';
+import { releasePlan } from './plan-release.service.ts';
+import { revisePlan } from './plan-revise.service.ts';
+import { signPlan } from './plan-sign.service.ts';
+import { submitPlan, withdrawPlan } from './plan-submit.service.ts';
 import { presentPlan, presentSummary } from './plan.presenter.ts';
 import { lastRound, listPlans, signOffsOf, viewPlan } from './plan-read.service.ts';
 import type { Worlds } from './world.ts';
