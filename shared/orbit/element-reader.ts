@@ -29,22 +29,25 @@ function placeOf(bytes: Uint8Array, index: number): [number, number] {
   return [line, index - start + 1];
 }
 
-/** Where the bytes stop being UTF-8. */
+const isUtf8 = (bytes: Uint8Array, isCut: boolean): boolean => {
+  try {
+    new TextDecoder('utf-8', { fatal: true }).decode(bytes, { stream: isCut });
+    return true;
+  } catch {
+    return false;
+  }
+};
+
+/** Index of the first byte of the first character that is not UTF-8. */
 function firstBadByte(bytes: Uint8Array): number {
-  let [good, bad] = [0, bytes.length];
-  const decodes = (length: number): boolean => {
-    try {
-      new TextDecoder('utf-8', { fatal: true }).decode(bytes.subarray(0, length), { stream: true });
-      return true;
-    } catch {
-      return false;
-    }
-  };
+  let [good, bad] = [0, bytes.length + 1];
   while (bad - good > 1) {
     const middle = (good + bad) >> 1;
-    if (decodes(middle)) good = middle;
+    if (isUtf8(bytes.subarray(0, middle), true)) good = middle;
     else bad = middle;
   }
+  // The good part may end with the beginning of the bad character.
+  while (good > 0 && !isUtf8(bytes.subarray(0, good), false)) good -= 1;
   return good;
 }
 
@@ -58,12 +61,11 @@ function textOf(bytes: Uint8Array): string | ElementSetReading {
       'The file holds a NUL byte: it is a binary file, not text. Upload a text file of element sets.';
     return unreadable(...placeOf(bytes, nul), 'FILE_BINARY', reason);
   }
-  try {
-    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
-  } catch {
+  if (!isUtf8(bytes, false)) {
     const reason = 'The file is not valid UTF-8 text; save it as UTF-8 or plain ASCII.';
     return unreadable(...placeOf(bytes, firstBadByte(bytes)), 'FILE_ENCODING', reason);
   }
+  return new TextDecoder().decode(bytes);
 }
 
 /** Another kind of file than two-line elements, recognised by its first characters or its name. */

@@ -36,6 +36,10 @@ function nameFault(line: FileLine): ElementFault | null {
     const reason = 'The name holds a tab or another control character; use blanks.';
     return { line: line.number, column: control + 1, code: 'TLE_CHARACTERS', reason };
   }
+  if (name.startsWith('<')) {
+    const reason = 'This is a line of a web page, not a name; save the element sets as plain text.';
+    return structureFault(line, 'TLE_NAME', reason);
+  }
   if (name.length <= NAME_LENGTH) return null;
   const reason = `The name has ${name.length} characters; ${NAME_LENGTH} are allowed. Shorten it.`;
   return structureFault(line, 'TLE_NAME', reason);

@@ -10,7 +10,7 @@ import {
 import type { ElementLines } from '../../shared/orbit/propagation.ts';
 import { DAY_MS, HOUR_MS, MINUTE_MS } from '../../shared/time.ts';
 import { denseLooks, densePasses } from './dense-scan.ts';
-import { twoLines } from './two-lines.ts';
+import { twoLines } from '../support/orbit/two-lines.ts';
 
 const FROM_MS = Date.UTC(2026, 11, 1);
 const TO_MS = FROM_MS + DAY_MS;

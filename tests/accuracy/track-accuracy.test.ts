@@ -14,7 +14,7 @@ import { DAY_MS } from '../../shared/time.ts';
 import { toDegrees } from '../../shared/units.ts';
 import { angleBetween, type Vector3 } from '../../shared/vector.ts';
 import { mixedSets } from './mixed-sets.ts';
-import { twoLines } from './two-lines.ts';
+import { twoLines } from '../support/orbit/two-lines.ts';
 
 const FROM_MS = Date.UTC(2026, 11, 1);
 const TO_MS = FROM_MS + DAY_MS;
