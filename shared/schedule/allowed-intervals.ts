@@ -29,7 +29,7 @@ export function allowedIntervalsIn(context: PlanContext, question: AllowedQuesti
   );
   const candidate = { pass, satellite, channel };
   const blocked = blockedIntervals(context, candidate, legs);
-  return possibleIntervals(context, candidate).flatMap((possible) =>
+  return possibleIntervals(context, candidate, true).flatMap((possible) =>
     subtract(possible, blocked).flatMap((left) => roundInward(left) ?? []),
   );
 }

@@ -113,14 +113,22 @@ export function blockedIntervals(
   ];
 }
 
-/** Where a leg of this pass may lie on this channel as far as physics go; empty where radio and channel do not fit. */
-export function possibleIntervals(context: PlanContext, candidate: Candidate): Interval[] {
+/**
+ * Where a leg of this pass may lie on this channel as far as physics go; empty where radio and channel do not fit.
+ * A receive leg may overhang by the guard time where asked for.
+ */
+export function possibleIntervals(
+  context: PlanContext,
+  candidate: Candidate,
+  withGuard: boolean,
+): Interval[] {
   const { pass, satellite, channel } = candidate;
   const radio = radioFor(satellite, channel.direction);
   const face = context.faces.get(channel.faceId);
   if (!radio || !face || !fitsBand(face, channel.direction, radio)) return [];
   if (!fitsChannel(channel, radio)) return [];
-  const overhangMs = channel.direction === 'receive' ? guardMs(context.day.station, satellite) : 0;
+  const overhangMs =
+    withGuard && channel.direction === 'receive' ? guardMs(context.day.station, satellite) : 0;
   return context
     .windowsOf(pass.id, channel.faceId, channel.direction)
     .map((window) => widen(window, overhangMs));
