@@ -29,6 +29,7 @@ import { requirementRoutes } from './modules/missions/requirement.routes.ts';
 import { passRoutes } from './modules/passes/pass.routes.ts';
 import { predictionSpan, startPrediction } from './modules/passes/prediction.service.ts';
 import { PlannedContact } from './modules/plans/contact.entity.ts';
+import { closureHitRoutes } from './modules/plans/closure-hits.routes.ts';
 import { markBrokenPlans } from './modules/plans/plan-attention.service.ts';
 import { planRoutes } from './modules/plans/plan.routes.ts';
 import { applyRun } from './modules/plans/plan-runs.service.ts';
@@ -36,6 +37,7 @@ import { openPassRoutes } from './modules/plans/open-passes.routes.ts';
 import { planWorkRoutes } from './modules/plans/plan-work.routes.ts';
 import { Worlds } from './modules/plans/world.ts';
 import { windowsOf } from './modules/plans/windows-of.ts';
+import { retimePlans } from './modules/plans/retime.service.ts';
 import { runRoutes } from './modules/runs/run.routes.ts';
 import { missionInUse, ownsSatellite } from './modules/satellites/satellite.service.ts';
 import { satelliteRoutes } from './modules/satellites/satellite.routes.ts';
@@ -115,6 +117,7 @@ const allRoutes = (deps: Deps, { jobs, worlds, streams }: Parts): RouteSpec[] =>
   }),
   ...planRoutes(deps, worlds),
   ...openPassRoutes(deps, worlds),
+  ...closureHitRoutes(deps, worlds),
   ...planWorkRoutes({ deps, worlds, jobs }),
   ...exportRoutes(deps, worlds),
   ...eventRoutes(streams),
@@ -126,6 +129,14 @@ const channelInUse: Parameters<typeof arrayRoutes>[1] = async ({ em }, id) =>
 /** What lies to the right in the line of modules reacts to what happened on the left. */
 const react = (deps: Deps, { jobs, worlds }: Pick<Parts, 'jobs' | 'worlds'>): void => {
   const say = (error: unknown) => deps.log.error({ err: error }, 'a reaction failed');
+  let afterChange: Promise<void> = Promise.resolve();
+  /** Contacts follow fresh passes first; then what is still broken is marked. One look after the other. */
+  const look = async (isFresh: boolean): Promise<void> => {
+    const today = dayOf(deps.clock.now());
+    if (isFresh) await retimePlans(deps, worlds, today);
+    await markBrokenPlans(deps, worlds, today);
+  };
+  jobs.alsoWaitFor(() => afterChange);
   deps.bus.subscribe((event) => {
     const span = predictionSpan(deps.clock.now());
     if (event.topic === 'elements') {
@@ -138,7 +149,7 @@ const react = (deps: Deps, { jobs, worlds }: Pick<Parts, 'jobs' | 'worlds'>): vo
       startPrediction(deps, jobs, { person: null, wish }).catch(say);
     }
     const mayBreak = ['passes', 'fleet', 'station', 'closure'].includes(event.topic);
-    if (mayBreak) markBrokenPlans(deps, worlds, dayOf(deps.clock.now())).catch(say);
+    if (mayBreak) afterChange = afterChange.then(() => look(event.topic === 'passes')).catch(say);
   });
 };
 

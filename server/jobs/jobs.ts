@@ -40,6 +40,7 @@ export class Jobs {
   readonly #deps: Deps;
   readonly #live = new Map<string, Live>();
   readonly #queues = new Map<RunKind, Promise<void>>();
+  #after: () => Promise<void> = () => Promise.resolve();
 
   constructor(deps: Deps) {
     this.#deps = deps;
@@ -107,8 +108,15 @@ export class Jobs {
     await this.#live.get(id)?.done;
   }
 
+  /** Work that follows from runs and is done when they are. */
+  alsoWaitFor(work: () => Promise<void>): void {
+    this.#after = work;
+  }
+
+  /** Resolves when nothing runs any more and what followed from it is done. */
   async idle(): Promise<void> {
     while (this.#live.size > 0) await Promise.all([...this.#live.values()].map((l) => l.done));
+    await this.#after();
   }
 
   async stop(): Promise<void> {

@@ -55,3 +55,15 @@ export const PatchClosure = z.strictObject({
   reason: Reason.optional(),
 });
 export type PatchClosure = z.infer<typeof PatchClosure>;
+
+/** A contact that a closure hits, and what could be done: in words, and as edits of its plan. */
+export const ClosureHit = z.strictObject({
+  planId: Id,
+  contactId: Id,
+  missionId: Id,
+  outcome: z.enum(['receive-still-good', 'other-channel', 'lost']),
+  words: z.string(),
+  edits: z.array(z.unknown()),
+});
+export type ClosureHit = z.infer<typeof ClosureHit>;
+export const ClosureHits = z.strictObject({ items: z.array(ClosureHit) });

@@ -30,3 +30,5 @@ export const CreateMission = z.strictObject({
 export type CreateMission = z.infer<typeof CreateMission>;
 export const PatchMission = CreateMission.partial().extend({ retired: z.boolean().optional() });
 export type PatchMission = z.infer<typeof PatchMission>;
+
+export const StandingConsent = z.strictObject({ given: z.boolean() });

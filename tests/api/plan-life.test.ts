@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { DAY_MS, dayOf, HOUR_MS, MINUTE_MS } from '../../shared/time.ts';
+import type { Plan } from '../../shared/schemas/plan.ts';
 import { PlanStory, seen } from '../support/plan-story.ts';
 import {
   freshFile,
@@ -22,7 +23,8 @@ afterAll(() => test.close());
 beforeEach(async () => {
   test.at(NOW);
   dayMs += DAY_MS;
-  if (dayMs >= NOW + 9 * DAY_MS) {
+  if (isSpoilt || dayMs >= NOW + 9 * DAY_MS) {
+    isSpoilt = false;
     await test.close();
     await fresh();
     dayMs = Date.parse('2026-12-03T00:00:00.000Z');
@@ -31,8 +33,9 @@ beforeEach(async () => {
   await story.assign();
 }, 60_000);
 /** For a test that changes the world itself: the next one begins with a new one. */
+let isSpoilt = false;
 const spoilWorld = (): void => {
-  dayMs = NOW + 9 * DAY_MS;
+  isSpoilt = true;
 };
 
 const statesOf = async () =>
@@ -353,12 +356,16 @@ describe('the running day', () => {
 });
 
 describe('fresh elements', () => {
-  it('mark a contact as drifted by its seconds when they go beyond the guard time', async () => {
-    spoilWorld();
-    await story.submit();
-    await story.signAll();
-    await story.release();
-    const { bytes } = freshFile([91001], NOW - HOUR_MS, -0.7);
+  const inForce = async (): Promise<Plan> => {
+    const scheduler = await test.as('scheduler');
+    const { body } = await scheduler
+      .get(`/api/plans?fromDay=${dayOf(dayMs)}&toDay=${dayOf(dayMs)}&state=released`)
+      .expect(200);
+    story.planId = (body as { items: { id: string }[] }).items[0]?.id ?? '';
+    return story.read();
+  };
+  const upload = async (anomalyShiftDeg: number): Promise<void> => {
+    const { bytes } = freshFile([91001], NOW - HOUR_MS, anomalyShiftDeg);
     await (
       await test.as('operator')
     )
@@ -366,15 +373,123 @@ describe('fresh elements', () => {
       .attach('file', bytes, 'fresh.tle')
       .expect(201);
     await test.app.jobs.idle();
-    const contacts = seen((await story.read()).contacts);
-    const drifted = contacts.filter((one) => one.driftSeconds !== null);
-    expect(drifted.length).toBeGreaterThan(0);
-    // 0.7 degrees of mean anomaly at 15.05 revolutions a day are 11.2 s.
-    for (const one of drifted) {
-      expect(one.satelliteName).toBe('Alder 1');
-      expect(one.driftSeconds ?? 0).toBeGreaterThan(9);
-      expect(one.driftSeconds ?? 0).toBeLessThan(13);
+  };
+  const alderOne = (plan: Plan) =>
+    seen(plan.contacts).filter((one) => one.satelliteName === 'Alder 1');
+
+  it('change nothing within the guard time', async () => {
+    spoilWorld();
+    await story.submit();
+    await story.signAll();
+    await story.release();
+    const before = await story.read();
+    // 0.2 degrees of mean anomaly at 15.05 revolutions a day are 3.2 s; the guard time is 5 s.
+    await upload(-0.2);
+    const after = await inForce();
+    expect(after.revision).toBe(1);
+    expect(alderOne(after).map((one) => [one.receive, one.driftSeconds])).toEqual(
+      alderOne(before).map((one) => [one.receive, null]),
+    );
+  });
+
+  it('move a released contact along, or mark it as drifted by its seconds where it would clash', async () => {
+    spoilWorld();
+    await story.submit();
+    await story.signAll();
+    await story.release();
+    const before = alderOne(await story.read());
+    const [stuck] = before;
+    if (!stuck || before.length < 2) throw new Error('no contacts');
+    const end = Date.parse(stuck.receive.toUtc);
+    await (
+      await test.as('operator')
+    )
+      .post('/api/closures')
+      .send({
+        scope: 'channel',
+        scopeId: stuck.receive.channelId,
+        direction: 'receive',
+        fromUtc: new Date(end + 3_000).toISOString(),
+        toUtc: new Date(end + 60_000).toISOString(),
+        reducedByDb: null,
+        reason: 'Cable check',
+      })
+      .expect(201);
+    // 0.7 degrees are 11.2 s.
+    await upload(-0.7);
+    const plan = await inForce();
+    expect(plan.revision).toBe(2);
+    const after = alderOne(plan);
+    const drifted = after.filter((one) => one.driftSeconds !== null);
+    expect(drifted.map((one) => one.id)).toEqual([stuck.id]);
+    expect(drifted[0]?.receive).toEqual(stuck.receive);
+    expect(drifted[0]?.driftSeconds ?? 0).toBeGreaterThan(9);
+    expect(drifted[0]?.driftSeconds ?? 0).toBeLessThan(13);
+    for (const one of after.filter((contact) => contact.id !== stuck.id)) {
+      const old = before.find((contact) => contact.id === one.id);
+      const shift = Date.parse(one.receive.fromUtc) - Date.parse(old?.receive.fromUtc ?? '');
+      expect(shift).toBeGreaterThan(8_000);
+      expect(shift).toBeLessThan(14_000);
     }
+    const mails = await (await test.as('admin')).get('/api/mails?limit=300').expect(200);
+    const told = (mails.body as { items: { subject: string; toAddress: string }[] }).items.filter(
+      (one) => one.subject.includes('fresh element sets'),
+    );
+    expect(told.map((one) => one.toAddress).sort()).toEqual([
+      'lead@test.example',
+      'operator@test.example',
+    ]);
+  });
+});
+
+describe('a closure', () => {
+  it('lists the contacts it hits, each with a proposal that holds', async () => {
+    const contact = seen((await story.read()).contacts).find((one) => one.transmit);
+    if (!contact?.transmit) throw new Error('no contact');
+    const operator = await test.as('operator');
+    const close = async (scopeId: string | undefined, direction: string, scope = 'channel') => {
+      const { body } = await operator
+        .post('/api/closures')
+        .send({
+          scope,
+          scopeId,
+          direction,
+          fromUtc: contact.receive.fromUtc,
+          toUtc: contact.receive.toUtc,
+          reducedByDb: null,
+          reason: 'Maintenance',
+        })
+        .expect(201);
+      const { id, version } = body as { id: string; version: number };
+      const hits = await operator.get(`/api/closures/${id}/hits`).expect(200);
+      await operator
+        .delete(`/api/closures/${id}`)
+        .set('if-match', `"${id}-v${version}"`)
+        .expect(204);
+      return (
+        hits.body as { items: { contactId: string; outcome: string; edits: object[] }[] }
+      ).items.filter((one) => one.contactId === contact.id);
+    };
+    const [moved] = await close(contact.receive.channelId, 'receive');
+    expect(moved?.outcome).toBe('other-channel');
+    const done = await story.post('/edits', { edits: moved?.edits ?? [] });
+    expect(done.status).toBe(200);
+    const [lost] = await close(test.stationId, 'both', 'station');
+    expect(lost?.outcome).toBe('lost');
+    const [half] = await close(test.faceId, 'transmit', 'face');
+    expect(half?.outcome).toBe('receive-still-good');
+  });
+});
+
+describe('standing consent', () => {
+  it('signs by itself while all requirements are met', async () => {
+    spoilWorld();
+    const lead = await test.as('lead');
+    const path = `/api/missions/${test.missions.alder}/standing-consent`;
+    await lead.put(path).send({ given: true }).expect(204);
+    await (await test.as('lead2')).put(path).send({ given: true }).expect(404);
+    await story.submit();
+    expect(await statesOf()).toEqual({ Alder: 'approved', Birch: 'pending' });
   });
 });
 

@@ -4,6 +4,7 @@ import {
   Mission as MissionAnswer,
   MissionPage,
   PatchMission,
+  StandingConsent,
 } from '../../../shared/schemas/mission.ts';
 import { reader, type Deps, type Work } from '../../deps.ts';
 import { route, type Answer } from '../../middleware/route.ts';
@@ -14,6 +15,7 @@ import {
   getMission,
   listMissions,
   patchMission,
+  setStandingConsent,
   withLeads,
   type MissionWithLeads,
 } from './mission.service.ts';
@@ -104,6 +106,19 @@ export const missionRoutes = (
         ifMatch,
         inUse: (work) => inUse(work, params.id),
       });
+      return { status: 204 };
+    },
+  }),
+  route({
+    method: 'put',
+    path: '/missions/:id/standing-consent',
+    summary: 'Approve by itself whenever all requirements are met',
+    access: 'session',
+    action: 'plan.sign',
+    params: IdParams,
+    body: StandingConsent,
+    handler: async ({ person, params, body }) => {
+      await setStandingConsent(deps, person, { id: params.id, given: body.given });
       return { status: 204 };
     },
   }),

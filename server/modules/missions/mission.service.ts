@@ -167,3 +167,24 @@ export const deleteMission = (
     });
     work.tell({ topic: 'fleet', id, version: mission.version });
   });
+
+/** "Approve whenever my requirements are met": given and taken back by each lead for a mission of his or hers. */
+export const setStandingConsent = (
+  deps: Deps,
+  person: Person,
+  { id, given }: { id: string; given: boolean },
+): Promise<void> =>
+  inTransaction(deps, async (work) => {
+    const mission = await getMission(work.em, person, id);
+    const lead = await work.em.findOne(MissionLead, { mission: id, user: person.id });
+    if (!lead) throw forbidden('Only a lead of the mission leaves standing consent.');
+    lead.standingConsent = given;
+    await work.em.flush();
+    await audit(work, person, {
+      action: 'mission.consent',
+      entity: 'mission',
+      entityId: id,
+      missionId: id,
+      summary: `${mission.name}: standing consent ${given ? 'given' : 'taken back'}`,
+    });
+  });
