@@ -59,7 +59,9 @@ const circleAround = (face: GroundFace, lossDb: number): ((psiDeg: number) => Ve
 
 function contour(face: GroundFace, lossDb: number, isLimit: boolean, radius: number): Contour {
   const at = circleAround(face, lossDb);
-  const points = Array.from({ length: 120 }, (_, i) => directionPoint(at(i * 3), radius));
+  const all = Array.from({ length: 120 }, (_, i) => directionPoint(at(i * 3), radius));
+  // Below the horizon the contour follows the rim.
+  const points = all.map((point) => clamp(point, radius));
   const lowest = points.reduce((best, p) => (p[1] > best[1] && inside(p, radius) ? p : best), [
     0,
     -Infinity,
@@ -73,7 +75,12 @@ function contour(face: GroundFace, lossDb: number, isLimit: boolean, radius: num
   return { lossDb, isLimit, d: pathThrough(points, true), foot: lowest, beside };
 }
 
-const inside = ([x, y]: Point, radius: number): boolean => Math.hypot(x, y) <= radius;
+const inside = ([x, y]: Point, radius: number): boolean => Math.hypot(x, y) < radius * 0.999;
+
+const clamp = (point: Point, radius: number): Point => {
+  const r = Math.hypot(point[0], point[1]);
+  return r <= radius ? point : [(point[0] / r) * radius, (point[1] / r) * radius];
+};
 
 function maskLayers(station: GroundStation, radius: number): { land: string; maskEdge: string } {
   const profile = maskProfile(

@@ -63,7 +63,7 @@ export function Field({
 }
 
 export const CONTROL =
-  'w-full min-w-0 rounded-control border border-line-strong bg-surface px-3 text-body text-ink aria-invalid:border-danger-mark disabled:bg-raised disabled:text-ink-muted read-only:bg-raised';
+  'w-full min-w-0 rounded-control border border-line-strong bg-surface px-3 text-body text-ink aria-invalid:border-danger-mark disabled:bg-raised disabled:text-ink-muted';
 
 type TextFieldProps = FieldProps & ComponentProps<'input'> & { large?: boolean };
 

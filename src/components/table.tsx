@@ -3,18 +3,37 @@ import { classNames } from '../lib/class-names.ts';
 import { Icon } from './icon.tsx';
 
 /** Native tables: horizontal rules only, heads that stay, numbers to the right, the unit in the head. */
-export function Table({
-  caption,
-  children,
-  className,
-}: {
+interface TableProps {
   caption: string;
   children: ReactNode;
   className?: string;
-}) {
+  /** Scrolls by itself under heads that stay. */
+  fill?: boolean;
+  /** In a side column: the outer cells have no margin. */
+  bare?: boolean;
+}
+
+export function Table({ caption, children, className, fill, bare }: TableProps) {
   return (
-    <div className="relative overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
-      <table className={classNames('w-full border-collapse text-table', className)}>
+    <div
+      className={classNames(
+        'relative',
+        fill ? 'max-h-[calc(100dvh-12.5rem)] min-h-60 overflow-auto' : 'overflow-x-auto',
+      )}
+      tabIndex={0}
+      role="region"
+      aria-label={caption}
+    >
+      <table
+        className={classNames(
+          'w-full border-separate border-spacing-0 text-table',
+          fill &&
+            '[&_thead_th]:sticky [&_thead_th]:top-0 [&_thead_th]:z-10 [&_thead_th]:bg-surface',
+          bare &&
+            '[&_td:first-child]:pl-0 [&_td:last-child]:pr-0 [&_th:first-child]:pl-0 [&_th:last-child]:pr-0',
+          className,
+        )}
+      >
         <caption className="sr-only">{caption}</caption>
         {children}
       </table>

@@ -98,6 +98,7 @@ export function Component() {
               {(data) => (
                 <ElementSetTable
                   sets={data}
+                  withState={url.state === 'all'}
                   chosenId={url.set ?? null}
                   onChoose={(set) => setUrl({ set })}
                 />
@@ -109,7 +110,7 @@ export function Component() {
         {chosen && (
           <aside
             aria-label={`Element set of ${chosen.satelliteName ?? chosen.catalogNumber}`}
-            className="border-line bg-surface drawer:w-92 drawer:border-l"
+            className="border-line bg-surface drawer:sticky drawer:top-13 drawer:max-h-[calc(100dvh-3.25rem)] drawer:w-92 drawer:self-start drawer:overflow-y-auto drawer:border-l"
           >
             <ElementSetDetail set={chosen} onClose={() => setUrl({ set: null })} />
           </aside>

@@ -11,7 +11,7 @@ export function StationSwitch() {
     return <span className="hidden text-table text-ink-muted narrow:inline">{station.name}</span>;
   return (
     <Menu
-      buttonClassName={buttonLook('quiet', 'small', 'max-w-36')}
+      buttonClassName={buttonLook('quiet', 'small', 'max-w-36 desk:max-w-60')}
       buttonProps={{ 'aria-label': `Station ${station.name}, choose another` }}
       face={
         <>

@@ -11,6 +11,8 @@ import { ElementSetAge } from './element-set-age.tsx';
 interface Props {
   sets: readonly ElementSet[];
   chosenId: string | null;
+  /** Left out where every row would say the same. */
+  withState: boolean;
   onChoose: (id: string) => void;
 }
 
@@ -21,16 +23,16 @@ const ORDERS = {
   uploaded: (set: ElementSet) => set.uploadedUtc,
 };
 
-export function ElementSetTable({ sets, chosenId, onChoose }: Props) {
+export function ElementSetTable({ sets, chosenId, withState, onChoose }: Props) {
   const missions = useMissions();
   const { rows, sortOf } = useSorted(sets, ORDERS, { by: 'age', descending: true });
   return (
-    <Table caption="Element sets">
+    <Table caption="Element sets" fill>
       <thead>
         <tr>
           <Head {...sortOf('satellite')}>Satellite</Head>
           <Head>Catalogue number</Head>
-          <Head>State</Head>
+          {withState && <Head>State</Head>}
           <Head {...sortOf('age')}>Age</Head>
           <Head {...sortOf('epoch')}>Epoch UTC</Head>
           <Head {...sortOf('uploaded')}>Uploaded UTC</Head>
@@ -57,9 +59,11 @@ export function ElementSetTable({ sets, chosenId, onChoose }: Props) {
               </span>
             </RowHead>
             <Cell className="font-mono text-mono">{set.catalogNumber}</Cell>
-            <Cell>
-              <ElementStateChip state={set.state} />
-            </Cell>
+            {withState && (
+              <Cell>
+                <ElementStateChip state={set.state} />
+              </Cell>
+            )}
             <Cell>
               <ElementSetAge hours={set.ageHours} />
             </Cell>
