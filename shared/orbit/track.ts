@@ -40,11 +40,36 @@ const NUMBERS_PER_KNOT = 6;
 export const trackEndMs = (track: Track): number =>
   track.startMs + (track.knots.length / NUMBERS_PER_KNOT - 1) * track.stepMs;
 
-/** Index of the first number of the knot before an instant; instants outside use the nearest piece. */
-function pieceBefore(track: Track, ms: number): number {
+/** Weights of a Hermite piece: of the step between the knots and of the velocities at its two ends. */
+interface Weights {
+  step: number;
+  before: number;
+  after: number;
+}
+
+/** Index of the first number of the knot before a place given in steps; places outside use the nearest piece. */
+function knotBefore(track: Track, steps: number): number {
   const last = track.knots.length / NUMBERS_PER_KNOT - 2;
-  const piece = Math.floor((ms - track.startMs) / track.stepMs);
-  return NUMBERS_PER_KNOT * Math.max(0, Math.min(last, piece));
+  return NUMBERS_PER_KNOT * Math.max(0, Math.min(last, Math.floor(steps)));
+}
+
+const positionWeights = (t: number, stepS: number): Weights => ({
+  step: t * t * (3 - 2 * t),
+  before: stepS * t * (1 - t) * (1 - t),
+  after: stepS * t * t * (t - 1),
+});
+
+const rateWeights = (t: number, stepS: number): Weights => ({
+  step: (6 * t * (1 - t)) / stepS,
+  before: (1 - t) * (1 - 3 * t),
+  after: t * (3 * t - 2),
+});
+
+/** The weighted part of the piece that begins with number `i` of the knots. */
+function blend(knots: readonly number[], i: number, weights: Weights): number {
+  const step = (knots[i + 6] ?? NaN) - (knots[i] ?? NaN);
+  const { before, after } = weights;
+  return weights.step * step + before * (knots[i + 3] ?? NaN) + after * (knots[i + 9] ?? NaN);
 }
 
 /**
@@ -53,34 +78,26 @@ function pieceBefore(track: Track, ms: number): number {
  * which holds for a second or two only.
  */
 export function stateAt(track: Track, ms: number): HorizonState {
-  const { knots } = track;
-  const i = pieceBefore(track, ms);
-  const stepS = track.stepMs / 1000;
-  const t = (ms - track.startMs) / track.stepMs - i / NUMBERS_PER_KNOT;
-  const t2 = t * t;
-  const [b, c, d] = [t2 * (3 - 2 * t), stepS * t * (1 - t) ** 2, stepS * t2 * (t - 1)];
-  const [eb, ec, ed] = [(6 * t * (1 - t)) / stepS, (1 - t) * (1 - 3 * t), t * (3 * t - 2)];
-  const along = (k: number): [number, number] => {
-    const [p0, v0] = [knots[i + k] ?? NaN, knots[i + k + 3] ?? NaN];
-    const [p1, v1] = [knots[i + k + 6] ?? NaN, knots[i + k + 9] ?? NaN];
-    return [p0 + b * (p1 - p0) + c * v0 + d * v1, eb * (p1 - p0) + ec * v0 + ed * v1];
-  };
-  const [east, north, up] = [along(0), along(1), along(2)];
+  const { knots, stepMs } = track;
+  const steps = (ms - track.startMs) / stepMs;
+  const i = knotBefore(track, steps);
+  const [t, stepS] = [steps - i / NUMBERS_PER_KNOT, stepMs / 1000];
+  const [position, rate] = [positionWeights(t, stepS), rateWeights(t, stepS)];
   return {
-    eastKm: east[0],
-    northKm: north[0],
-    upKm: up[0],
-    eastKmS: east[1],
-    northKmS: north[1],
-    upKmS: up[1],
+    eastKm: (knots[i] ?? NaN) + blend(knots, i, position),
+    northKm: (knots[i + 1] ?? NaN) + blend(knots, i + 1, position),
+    upKm: (knots[i + 2] ?? NaN) + blend(knots, i + 2, position),
+    eastKmS: blend(knots, i, rate),
+    northKmS: blend(knots, i + 1, rate),
+    upKmS: blend(knots, i + 2, rate),
   };
 }
 
 /** Azimuth, elevation, range and range rate of a state. Azimuth is computed, never interpolated. */
 export function lookAnglesOf(state: HorizonState): LookAngles {
   const { eastKm, northKm, upKm } = state;
-  const horizontalKm = Math.hypot(eastKm, northKm);
-  const rangeKm = Math.hypot(horizontalKm, upKm);
+  const horizontalKm = Math.sqrt(eastKm * eastKm + northKm * northKm);
+  const rangeKm = Math.sqrt(horizontalKm * horizontalKm + upKm * upKm);
   const radial = eastKm * state.eastKmS + northKm * state.northKmS + upKm * state.upKmS;
   return {
     azimuthDeg: wrapDegrees(toDegrees(Math.atan2(eastKm, northKm))),
@@ -94,9 +111,15 @@ export function lookAnglesOf(state: HorizonState): LookAngles {
 export const lookAnglesAt = (track: Track, ms: number): LookAngles =>
   lookAnglesOf(stateAt(track, ms));
 
-/** Unit vector [east, north, up] towards the satellite at an instant; accuracy as `stateAt`. */
+/** Unit vector [east, north, up] towards the satellite at an instant; accuracy as `stateAt`. The fastest of all. */
 export function directionAt(track: Track, ms: number): Vector3 {
-  const { eastKm, northKm, upKm } = stateAt(track, ms);
-  const rangeKm = Math.sqrt(eastKm * eastKm + northKm * northKm + upKm * upKm);
-  return [eastKm / rangeKm, northKm / rangeKm, upKm / rangeKm];
+  const { knots, stepMs } = track;
+  const steps = (ms - track.startMs) / stepMs;
+  const i = knotBefore(track, steps);
+  const weights = positionWeights(steps - i / NUMBERS_PER_KNOT, stepMs / 1000);
+  const eastKm = (knots[i] ?? NaN) + blend(knots, i, weights);
+  const northKm = (knots[i + 1] ?? NaN) + blend(knots, i + 1, weights);
+  const upKm = (knots[i + 2] ?? NaN) + blend(knots, i + 2, weights);
+  const perKm = 1 / Math.sqrt(eastKm * eastKm + northKm * northKm + upKm * upKm);
+  return [eastKm * perKm, northKm * perKm, upKm * perKm];
 }

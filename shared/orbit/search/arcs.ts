@@ -78,7 +78,7 @@ export function arcsOf(orbit: Orbit, fromMs: number, toMs: number, longestMs: nu
   const arcs: Arc[] = [];
   let from: Anchor = { ms: fromMs, teme: exactState(orbit, fromMs) };
   for (let piece = 1; piece <= count; piece++) {
-    const ms = fromMs + ((toMs - fromMs) * piece) / count;
+    const ms = piece === count ? toMs : fromMs + ((toMs - fromMs) * piece) / count;
     const to = { ms, teme: exactState(orbit, ms) };
     arcs.push(...arcsBetween(orbit, from, to, MOST_SPLITS));
     from = to;
