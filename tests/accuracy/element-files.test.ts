@@ -34,7 +34,7 @@ describe('malformed element files', () => {
       expect(fault?.reason.length).toBeGreaterThan(20);
       expect(fault?.line).toBeGreaterThan(0);
       expect(fault?.column).toBeGreaterThan(0);
-      if (file.format === 'tle' || file.format === 'bytes') expect(fault?.code).toBe(file.reason);
+      if (file.format === 'TLE' || file.format === 'bytes') expect(fault?.code).toBe(file.reason);
     },
   );
 });

@@ -19,7 +19,7 @@ const MOST_STEPS = 6;
 
 /**
  * Instants at which the elevation turns, on the approximation. Between two fine nodes (22 deg of a revolution or less) it
- * turns at most once. Segments that stay below the mask are passed over.
+ * turns at most once. Culminations certainly below the mask are passed over.
  */
 export function elevationExtremes(run: Run): Extreme[] {
   const found: Extreme[] = [];
@@ -27,7 +27,9 @@ export function elevationExtremes(run: Run): Extreme[] {
     const [from, to] = [run.nodes[index], run.nodes[index + 1]];
     if (!from || !to) continue;
     const [before, after] = [climbOf(from), climbOf(to)];
-    if (before > 0 === after > 0 || highestUpKm(from, to) < run.limitKm) continue;
+    if (before > 0 === after > 0) continue;
+    // A culmination below the mask is nothing; a lowest point there parts two passes.
+    if (before > 0 && highestUpKm(from, to) < run.limitKm) continue;
     const segment = segmentAfter(run, index);
     const ms = rootBetween(
       (at) => climbOf(stateOn(segment, at)),
