@@ -3,6 +3,7 @@ import {
   Channel,
   ChannelPage,
   Closure,
+  ClosureHits,
   ClosurePage,
   type CreateClosure,
   type PatchChannel,
@@ -32,6 +33,12 @@ export const stationQueries = {
       queryFn: ({ signal }) =>
         callApiForAll('/api/channels', ChannelPage, { query: { stationId }, signal }),
       staleTime: 60_000,
+    }),
+  hits: (closureId: string) =>
+    queryOptions({
+      queryKey: [...stationQueries.all, 'closures', closureId, 'hits'],
+      queryFn: async ({ signal }) =>
+        (await callApi(`/api/closures/${closureId}/hits`, ClosureHits, { signal })).items,
     }),
   closures: (stationId: string) =>
     queryOptions({
