@@ -14,7 +14,8 @@ const minutesOf = (contacts: readonly { receive: LegModel }[]): number =>
 
 type Fate = 'kept' | 'channelOnly' | 'changed';
 
-function fateOf(before: ContactModel, after: SolvedContact): Fate {
+/** What became of a contact. */
+export function fateOf(before: ContactModel, after: SolvedContact): Fate {
   const times =
     sameTimes(before.receive, after.receive) && sameTimes(before.transmit, after.transmit);
   if (!times || before.faceId !== after.faceId) return 'changed';

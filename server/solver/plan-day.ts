@@ -1,6 +1,6 @@
 import { planContext, type PlanContext } from '../../shared/schedule/context.ts';
 import type { ContactModel } from '../../shared/schedule/model.ts';
-import { changesOf } from './changes.ts';
+import { changesOf, fateOf } from './changes.ts';
 import { compileDay, type CompiledDay, type CompileQuestion } from './compile/compile-day.ts';
 import { passesForRepair, sortOutBroken, withRepairGoals } from './compile/repair.ts';
 import { vetLocks, type SetAside } from './compile/standing.ts';
@@ -8,6 +8,7 @@ import { contactWorth } from './compile/worth.ts';
 import type { RunControl } from './control.ts';
 import { decodePlan } from './decode.ts';
 import { solveLexicographic, valueOf, type LexicographicResult } from './lexicographic.ts';
+import { polish } from './polish.ts';
 import { lockWords, proofWords } from './proof-words.ts';
 import type { Provenance, SolvedContact, SolveInput, SolveResult } from './planned.ts';
 
@@ -43,9 +44,6 @@ function taskOf(input: SolveInput): Task {
   return { context, input, stand: [...held, ...whole], free: broken, broken, setAside };
 }
 
-/** Step of the trimmed variants in a repair, where only a few passes are open. */
-const REPAIR_GRID_MS = 20_000;
-
 function compileTask(
   { context, input, stand, free, broken }: Task,
   apart: ReadonlySet<string>,
@@ -56,7 +54,6 @@ function compileTask(
     fixed: [...input.day.neighbours, ...stand],
     current: free,
     passes: repair ? passesForRepair(context, broken) : null,
-    gridMs: repair ? REPAIR_GRID_MS : null,
     apart,
   };
   const compiled = compileDay(question);
@@ -94,15 +91,13 @@ export async function planDay(input: SolveInput, control: PlanControl): Promise<
         const contacts = decodePlan(task.context, compiled, columns, before);
         if (!Array.isArray(contacts)) return;
         const value = valueOf(compiled.assignment, columns);
-        control.onPlan([...standing(task.stand), ...contacts], objectiveOf(task, value));
+        const minutes = value / 60 + standingMinutes(task);
+        control.onPlan([...standing(task.stand), ...contacts], minutes);
       },
     });
     const contacts = decodePlan(task.context, compiled, solved.columns, before);
     if (Array.isArray(contacts))
-      return resultOf(task, [...standing(task.stand), ...contacts], solved, {
-        seconds: (control.now() - began) / 1000,
-        columns: compiled.options.length,
-      });
+      return resultOf(task, compiled, solved, polished(task, contacts), control.now() - began);
     // Only channels with something fixed on them can be the trouble.
     const named = contacts.channels.filter(({ id }) => compiled.fixed.heldOn(id).length > 0);
     if (named.every(({ id }) => apart.has(id))) throw new Error('The channels cannot be numbered.');
@@ -110,33 +105,57 @@ export async function planDay(input: SolveInput, control: PlanControl): Promise<
   }
 }
 
-/** Weighted minutes of a plan: what the solver chose and what stands. */
-function objectiveOf({ context, stand }: Task, value: number): number {
-  const standingWorth = stand.reduce((sum, contact) => sum + contactWorth(context, contact), 0);
-  return (value + standingWorth) / 60;
+/** The contacts that stand and the chosen ones, stretched to the second; a repair changes nothing that it need not. */
+function polished(task: Task, chosen: SolvedContact[]): SolvedContact[] {
+  const { context, input, stand } = task;
+  const stood = standing(stand);
+  const untouched = new Set([...stood, ...chosen.filter((one) => isUnchanged(input.current, one))]);
+  const all = [...stood, ...chosen];
+  const served = new Set([...all, ...context.day.neighbours].map(({ passId }) => passId));
+  const open = input.mode === 'new' ? context.day.passes.filter(({ id }) => !served.has(id)) : [];
+  return polish(context, all, untouched, open);
+}
+
+const isUnchanged = (current: readonly ContactModel[], contact: SolvedContact): boolean => {
+  const before = current.find(({ id }) => id === contact.id);
+  return before !== undefined && fateOf(before, contact) !== 'changed';
+};
+
+/** Weighted minutes that the solver counted for what stands beside its choice. */
+const standingMinutes = ({ context, stand }: Task): number =>
+  stand.reduce((sum, contact) => sum + contactWorth(context, contact, true), 0) / 60;
+
+function objectiveOf({ context, input }: Task, contacts: readonly SolvedContact[]): number {
+  const worth = contacts.map((one) => contactWorth(context, one, isUnchanged(input.current, one)));
+  return worth.reduce((sum, one) => sum + one, 0) / 60;
 }
 
 function resultOf(
   task: Task,
-  contacts: SolvedContact[],
+  compiled: CompiledDay,
   solved: LexicographicResult,
-  figures: { seconds: number; columns: number },
+  contacts: SolvedContact[],
+  tookMs: number,
 ): SolveResult {
   const { context, input, setAside } = task;
-  const objective = objectiveOf(task, solved.value);
-  const bound =
-    solved.valueBound === null ? null : Math.max(objective, objectiveOf(task, solved.valueBound));
+  const objective = objectiveOf(task, contacts);
+  const onGrid = solved.valueBound === null ? null : solved.valueBound / 60 + standingMinutes(task);
+  const bound = onGrid === null ? null : Math.max(objective, onGrid);
   const gap = bound === null ? null : (bound - objective) / Math.max(1, Math.abs(objective));
   const provenance = provenanceOf(solved, gap);
   const locksSetAside = setAside.map((one) => lockWords(context, one));
-  const proof = { provenance, gap, levels: solved.levels, limitSeconds: input.timeLimitSeconds };
+  const gridSeconds = compiled.gridMs && compiled.gridMs / 1000;
+  const { timeLimitSeconds: limitSeconds } = input;
+  const proof = { provenance, gap, levels: solved.levels, limitSeconds, gridSeconds };
   return {
     contacts,
     objective,
     bound,
     gap,
     provenance,
-    ...figures,
+    seconds: tookMs / 1000,
+    columns: compiled.options.length,
+    gridSeconds,
     words: proofWords(context, contacts, proof, locksSetAside),
     changes: changesOf(context, input.current, contacts),
     locksSetAside,

@@ -41,12 +41,14 @@ export interface SolveResult {
   contacts: SolvedContact[];
   /** Weighted minutes: downlink minutes times the weight of the mission, a quarter for wanted uplink. */
   objective: number;
-  /** Proven upper bound of it among plans that meet the minimums as well; null: none is known. */
+  /** Proven upper bound of it among plans on the grid that meet the minimums as well; null: none is known. */
   bound: number | null;
   gap: number | null;
   provenance: Provenance;
   seconds: number;
   columns: number;
+  /** Step of the hand-over instants of trimmed contacts in the model; null: nothing had to be trimmed. */
+  gridSeconds: number | null;
   /** What a scheduler reads: how good the plan is, what it misses, what limited the run. */
   words: string;
   changes: PlanChanges;

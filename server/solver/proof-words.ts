@@ -13,12 +13,14 @@ export interface Proof {
   gap: number | null;
   levels: readonly LevelResult[];
   limitSeconds: number;
+  gridSeconds: number | null;
 }
 
-function quality({ provenance, gap }: Proof): string {
-  const far = gap === null ? 'how far from the best is not known' : gapWords(gap);
+function quality({ provenance, gap, gridSeconds }: Proof): string {
+  const grid = gridSeconds === null ? '' : ` on a ${gridSeconds} s grid`;
+  const far = gap === null ? 'how far from the best is not known' : `${gapWords(gap)}${grid}`;
   if (provenance === 'proven')
-    return gap !== null && gap > 1e-6 ? `Proven: ${gapWords(gap)}.` : 'Proven best.';
+    return gap !== null && gap > 1e-6 ? `Proven: ${far}.` : `Proven best${grid}.`;
   if (provenance === 'heuristic') return `Found by search, not by the solver; ${far}.`;
   if (provenance === 'cancelled') return `Cancelled: the best plan found so far; ${far}.`;
   return `${far.charAt(0).toUpperCase()}${far.slice(1)}.`;

@@ -49,7 +49,8 @@ function lastPlan(
   seconds: number,
 ): SolveResult {
   const context = planContext(input.day, input.facts);
-  const proof = { provenance, gap: null, levels: [], limitSeconds: input.timeLimitSeconds };
+  const limitSeconds = input.timeLimitSeconds;
+  const proof = { provenance, gap: null, levels: [], limitSeconds, gridSeconds: null };
   return {
     contacts,
     objective,
@@ -58,6 +59,7 @@ function lastPlan(
     provenance,
     seconds,
     columns: 0,
+    gridSeconds: null,
     words: proofWords(context, contacts, proof, []),
     changes: changesOf(context, input.current, contacts),
     locksSetAside: [],

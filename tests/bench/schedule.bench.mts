@@ -57,7 +57,7 @@ const timed = <T,>(work: () => T): [T, number] => {
 };
 
 const described = (context: PlanContext, contacts: readonly ContactModel[]): string => {
-  const minutes = contacts.reduce((sum, one) => sum + contactWorth(context, one), 0) / 60;
+  const minutes = contacts.reduce((sum, one) => sum + contactWorth(context, one, false), 0) / 60;
   const unmet = judgeRequirements(context.day, contacts).filter(({ met }) => !met).length;
   return `${contacts.length} contacts, ${minutes.toFixed(0)} weighted min, ${unmet} unmet`;
 };

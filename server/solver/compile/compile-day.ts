@@ -4,10 +4,18 @@ import type { ContactModel, PassModel } from '../../../shared/schedule/model.ts'
 import type { Interval } from '../../../shared/time.ts';
 import type { Assignment, Column, Conflict, Resource } from '../model/assignment.ts';
 import { channelGroups, type ChannelGroup } from './channel-groups.ts';
+import { findContention } from './contention.ts';
 import { askedOfDay } from './demands.ts';
 import { fixedPlan, type FixedPlan } from './fixed-plan.ts';
 import { margins } from './open-pieces.ts';
-import { optionsKeeping, optionsOfPass, type Option, type OptionSetting } from './options.ts';
+import {
+  countOptions,
+  optionsKeeping,
+  optionsOfPass,
+  type Cutting,
+  type Option,
+} from './options.ts';
+import { piecesOfPass, type CompileSetting, type PassPieces } from './pass-pieces.ts';
 import { LONG_MS } from './variants.ts';
 import { worthOf } from './worth.ts';
 
@@ -19,9 +27,9 @@ export interface CompileQuestion {
   current: readonly ContactModel[];
   /** Passes that may be served; null: every pass that no fixed contact serves. */
   passes: readonly PassModel[] | null;
-  gridMs: number | null;
   apart: ReadonlySet<string>;
-  variantsOf?: OptionSetting['variantsOf'];
+  /** Step of the hand-over instants of trimmed contacts; null: whole pieces only; left out: as fine as pays. */
+  gridMs?: number | null;
 }
 
 export interface CompiledDay {
@@ -32,6 +40,8 @@ export interface CompiledDay {
   fixed: FixedPlan;
   /** Columns that keep a contact of the current plan. */
   kept: number[];
+  /** Step of the hand-over instants of trimmed contacts; null: nothing contends, so nothing is trimmed. */
+  gridMs: number | null;
 }
 
 /** A pass with an hours-long window may bear several contacts. */
@@ -48,26 +58,67 @@ const sameLegs = (a: Option, b: Option): boolean => {
   return leg(a.receive, b.receive) && leg(a.transmit, b.transmit);
 };
 
-/** All options of the day; one that equals a current contact stands for that contact unchanged. */
-function optionsOfDay(question: CompileQuestion, setting: OptionSetting): Option[] {
-  const { context, current } = question;
-  return openPasses(question, setting.fixed).flatMap((pass) => {
-    const found = optionsOfPass(setting, pass);
-    for (const contact of current) {
-      const satellite = context.satellites.get(contact.satelliteId);
-      if (contact.passId !== pass.id || !satellite) continue;
-      for (const keeping of optionsKeeping(
-        setting,
-        contact,
-        guardMs(context.day.station, satellite),
-      )) {
-        const same = found.findIndex((option) => sameLegs(option, keeping));
-        if (same >= 0) found[same] = keeping;
-        else found.push(keeping);
-      }
+/** Options of a pass; one that equals a current contact stands for that contact unchanged. */
+function withCurrent(
+  { context, current }: CompileQuestion,
+  setting: CompileSetting,
+  pass: PassModel,
+  found: Option[],
+): Option[] {
+  const options = [...found];
+  for (const contact of current) {
+    const satellite = context.satellites.get(contact.satelliteId);
+    if (contact.passId !== pass.id || !satellite) continue;
+    const guard = guardMs(context.day.station, satellite);
+    for (const keeping of optionsKeeping(setting, contact, guard)) {
+      const same = options.findIndex((option) => sameLegs(option, keeping));
+      if (same >= 0) options[same] = keeping;
+      else options.push(keeping);
     }
-    return found;
-  });
+  }
+  return options;
+}
+
+/** Steps of the hand-over instants, ms, the finest first. */
+const GRIDS_MS = [20_000, 30_000, 60_000, 120_000, 240_000];
+/** So many columns are solved in a second or so at ordinary load. */
+const COLUMN_BUDGET = 8000;
+
+/** The finest grid that stays within the budget; the coarsest one otherwise. */
+function chooseGrid(pieces: readonly PassPieces[], contentionOf: Cutting['contentionOf']): number {
+  const fits = (gridMs: number): boolean => {
+    let count = 0;
+    for (const one of pieces) {
+      count += countOptions(one, { contentionOf, gridMs });
+      if (count > COLUMN_BUDGET) return false;
+    }
+    return true;
+  };
+  return GRIDS_MS.find(fits) ?? GRIDS_MS.at(-1) ?? 240_000;
+}
+
+const contends = (pieces: readonly PassPieces[], contentionOf: Cutting['contentionOf']): boolean =>
+  pieces.some((one) =>
+    [...one.receive, ...one.transmit].some((piece) => {
+      const { crowds, meetings } = contentionOf(one, piece);
+      return crowds.length + meetings.length > 0;
+    }),
+  );
+
+function optionsOfDay(
+  question: CompileQuestion,
+  setting: CompileSetting,
+): { options: Option[]; gridMs: number | null } {
+  const open = openPasses(question, setting.fixed);
+  const pieces = open.flatMap((pass) => piecesOfPass(setting, pass) ?? []);
+  const contentionOf = findContention(setting, pieces);
+  const chosen = (): number | null =>
+    contends(pieces, contentionOf) ? chooseGrid(pieces, contentionOf) : null;
+  const gridMs = question.gridMs === undefined ? chosen() : question.gridMs;
+  const options = pieces.flatMap((one) =>
+    withCurrent(question, setting, one.pass, optionsOfPass(one, { contentionOf, gridMs })),
+  );
+  return { options, gridMs };
 }
 
 function openPasses({ context, passes }: CompileQuestion, fixed: FixedPlan): PassModel[] {
@@ -151,12 +202,11 @@ function conflictsOf(context: PlanContext, numbering: Numbering): Conflict[] {
 
 /** The day as an assignment problem: everything that facts, closures and fixed contacts leave open. */
 export function compileDay(question: CompileQuestion): CompiledDay {
-  const { context, gridMs } = question;
+  const { context } = question;
   const groups = channelGroups(context.day, question.apart);
   const fixed = fixedPlan(context, question.fixed);
-  const { variantsOf } = question;
-  const setting = { context, fixed, groups, gridMs, ...(variantsOf ? { variantsOf } : {}) };
-  const options = optionsOfDay(question, setting);
+  const setting = { context, fixed, groups };
+  const { options, gridMs } = optionsOfDay(question, setting);
   const families = [...new Set(options.map(({ pass }) => pass.id))];
   const numbering = {
     groups,
@@ -176,5 +226,5 @@ export function compileDay(question: CompileQuestion): CompiledDay {
     ...askedOfDay(context, options, question.fixed),
   };
   const kept = [...options.keys()].filter((index) => options[index]?.keeps);
-  return { assignment, options, groups, fixed, kept };
+  return { assignment, options, groups, fixed, kept, gridMs };
 }

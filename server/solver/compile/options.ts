@@ -1,11 +1,10 @@
-import type { PlanContext } from '../../../shared/schedule/context.ts';
-import type { ContactModel, PassModel, SatelliteModel } from '../../../shared/schedule/model.ts';
-import { fitsChannel, radioFor } from '../../../shared/schedule/radio-fit.ts';
+import type { ContactModel, PassModel } from '../../../shared/schedule/model.ts';
 import { lacking, servicesOf, type Service } from '../../../shared/schedule/services.ts';
-import { contains, intersect, type Interval } from '../../../shared/time.ts';
+import { contains, intersect, MINUTE_MS, type Interval } from '../../../shared/time.ts';
 import type { ChannelGroup } from './channel-groups.ts';
-import type { FixedPlan } from './fixed-plan.ts';
-import { openPieces } from './open-pieces.ts';
+import type { Contention } from './contention.ts';
+import { margins, openPieces } from './open-pieces.ts';
+import { groupsFor, type CompileSetting, type PassPieces, type Piece } from './pass-pieces.ts';
 import { variants } from './variants.ts';
 
 export interface OptionLeg extends Interval {
@@ -25,56 +24,17 @@ export interface Option {
   sameChannels: boolean;
 }
 
-export interface OptionSetting {
-  context: PlanContext;
-  fixed: FixedPlan;
-  groups: readonly ChannelGroup[];
-  /** Step of the trimmed variants; null: whole pieces only. */
+/** How the pieces of a pass are cut. */
+export interface Cutting {
+  contentionOf: (pieces: PassPieces, piece: Piece) => Contention;
+  /** Step of the hand-over instants; null: whole pieces only. */
   gridMs: number | null;
-  /** Ways to use a piece; replaced by finer ones near a known plan. */
-  variantsOf?: (
-    pass: PassModel,
-    group: ChannelGroup,
-    piece: Interval,
-    minimumMs: number,
-  ) => Interval[];
 }
 
-const groupsFor = (
-  { groups }: OptionSetting,
-  faceId: string,
-  direction: ChannelGroup['direction'],
-  satellite: SatelliteModel,
-): ChannelGroup[] => {
-  const radio = radioFor(satellite, direction);
-  return groups.filter(
-    (group) =>
-      group.faceId === faceId &&
-      group.direction === direction &&
-      radio !== null &&
-      group.channels.some((channel) => fitsChannel(channel, radio)),
-  );
-};
-
-/** The longest uplink that each fitting group leaves inside a downlink. */
-function uplinksWithin(
-  setting: OptionSetting,
-  pass: PassModel,
-  satellite: SatelliteModel,
-  faceId: string,
-  receive: Interval,
-): OptionLeg[] {
-  const windows = setting.context.windowsOf(pass.id, faceId, 'transmit');
-  return groupsFor(setting, faceId, 'transmit', satellite).flatMap((group) => {
-    const pieces = windows
-      .flatMap((window) => intersect(window, receive) ?? [])
-      .flatMap((span) =>
-        openPieces(setting.context, setting.fixed, { group, pass, satellite, span }),
-      );
-    const longest = pieces.toSorted((a, b) => b.toMs - b.fromMs - (a.toMs - a.fromMs))[0];
-    return longest ? [{ group, ...longest }] : [];
-  });
-}
+/** Uplinks are shorter and their ends matter less: they are cut on a coarser grid, never finer than this. */
+const UPLINK_GRID_MS = 2 * MINUTE_MS;
+/** An uplink below this is no use to anybody who only wants one. */
+const LEAST_UPLINK_MS = MINUTE_MS;
 
 const serves = (
   services: readonly Service[],
@@ -91,56 +51,70 @@ const serves = (
   });
 };
 
-function optionsOfReceive(
-  setting: OptionSetting,
-  pass: PassModel,
-  satellite: SatelliteModel,
-  services: readonly Service[],
-  receive: OptionLeg,
-): Option[] {
+/** Uplinks of a downlink on its face: the longest a group leaves, and shorter ones where uplinks contend. */
+function uplinksWithin(pieces: PassPieces, cutting: Cutting, receive: OptionLeg): OptionLeg[] {
+  const { services, satellite } = pieces;
+  const leastMs = Math.min(
+    ...services.map(({ leastUplinkMs }) => leastUplinkMs || LEAST_UPLINK_MS),
+  );
+  return pieces.transmit
+    .filter(({ group }) => group.faceId === receive.group.faceId)
+    .flatMap((piece) => {
+      const inside = intersect(piece, receive);
+      if (!inside) return [];
+      const { group } = piece;
+      const whole = { group, ...inside };
+      const minimumMs = Math.min(leastMs, inside.toMs - inside.fromMs);
+      const gridMs = cutting.gridMs && Math.max(UPLINK_GRID_MS, 2 * cutting.gridMs);
+      const contention = cutting.contentionOf(pieces, whole);
+      const question = {
+        piece: inside,
+        minimumMs,
+        contention,
+        margins: margins(group, satellite),
+        gridMs,
+      };
+      return variants(question).map((way) => ({ group, ...way }));
+    });
+}
+
+function optionsOfReceive(pieces: PassPieces, cutting: Cutting, receive: OptionLeg): Option[] {
+  const { pass, services, uplinkWanted } = pieces;
   const { faceId } = receive.group;
-  const uplinkWanted = services.some(({ uplink }) => uplink !== 'none');
   const base = { pass, faceId, receive, uplinkWanted, keeps: null, sameChannels: false };
-  const uplinks = uplinkWanted ? uplinksWithin(setting, pass, satellite, faceId, receive) : [];
-  const transmits: (OptionLeg | null)[] = [null, ...uplinks];
+  const transmits: (OptionLeg | null)[] = [null, ...uplinksWithin(pieces, cutting, receive)];
   return transmits
     .filter((transmit) => serves(services, receive, transmit))
     .map((transmit) => ({ ...base, transmit }));
 }
 
-/** Legs may begin from here on: contacts belong to the day in which they begin. */
-function plannable({ day }: PlanContext, piece: Interval): Interval | null {
-  if (piece.fromMs >= day.day.toMs) return null;
-  const fromMs = Math.max(piece.fromMs, day.day.fromMs);
-  return fromMs < piece.toMs ? { fromMs, toMs: piece.toMs } : null;
+/** About how many options a pass will have; counted without making them. */
+export function countOptions(pieces: PassPieces, cutting: Cutting): number {
+  const { minimumMs } = pieces;
+  return pieces.receive.reduce((sum, piece) => {
+    const contention = cutting.contentionOf(pieces, piece);
+    const leg = margins(piece.group, pieces.satellite);
+    const { gridMs } = cutting;
+    const downlinks = variants({ piece, minimumMs, contention, margins: leg, gridMs }).length;
+    return sum + downlinks * (1 + uplinksWithin(pieces, cutting, piece).length);
+  }, 0);
 }
 
 /** Every option of a pass beside the fixed plan. */
-export function optionsOfPass(setting: OptionSetting, pass: PassModel): Option[] {
-  const { context, fixed } = setting;
-  const satellite = context.satellites.get(pass.satelliteId);
-  if (!satellite) return [];
-  const services = servicesOf(context.day, pass);
-  const minimumMs = Math.min(...services.map((service) => service.minimumMs));
-  const waysOf =
-    setting.variantsOf ?? ((_pass, _group, piece, least) => variants(piece, least, setting.gridMs));
-  return context.day.faces.flatMap((face) =>
-    context.windowsOf(pass.id, face.id, 'receive').flatMap((span) =>
-      groupsFor(setting, face.id, 'receive', satellite).flatMap((group) =>
-        openPieces(context, fixed, { group, pass, satellite, span })
-          .flatMap((piece) => plannable(context, piece) ?? [])
-          .flatMap((piece) => waysOf(pass, group, piece, minimumMs))
-          .flatMap((way) =>
-            optionsOfReceive(setting, pass, satellite, services, { group, ...way }),
-          ),
-      ),
-    ),
-  );
-}
+export const optionsOfPass = (pieces: PassPieces, cutting: Cutting): Option[] =>
+  pieces.receive.flatMap((piece) => {
+    const { group } = piece;
+    const contention = cutting.contentionOf(pieces, piece);
+    const { minimumMs } = pieces;
+    const leg = margins(group, pieces.satellite);
+    return variants({ piece, minimumMs, contention, margins: leg, gridMs: cutting.gridMs }).flatMap(
+      (way) => optionsOfReceive(pieces, cutting, { group, ...way }),
+    );
+  });
 
 /** Groups on which a leg of a current contact could stay at its times; a receive leg may overhang by the guard time. */
 function placesFor(
-  setting: OptionSetting,
+  setting: CompileSetting,
   contact: ContactModel,
   direction: ChannelGroup['direction'],
   overhangMs: number,
@@ -165,7 +139,7 @@ const holds = ({ group }: OptionLeg, channelId: string | undefined): boolean =>
 
 /** Options that leave a contact of the current plan at its times on its face; empty when it cannot stay so. */
 export function optionsKeeping(
-  setting: OptionSetting,
+  setting: CompileSetting,
   contact: ContactModel,
   guardMs: number,
 ): Option[] {

@@ -14,7 +14,7 @@ export function makeStanding(
   return (contact, others) => {
     const satellite = context.satellites.get(contact.satelliteId);
     if (!satellite) return false;
-    const setting = { context, fixed: fixedPlan(context, others), groups, gridMs: null };
+    const setting = { context, fixed: fixedPlan(context, others), groups };
     const guard = guardMs(context.day.station, satellite);
     return optionsKeeping(setting, contact, guard).some(({ sameChannels }) => sameChannels);
   };

@@ -1,4 +1,5 @@
-import { MINUTE_MS, type Interval } from '../../../shared/time.ts';
+import { MINUTE_MS, SECOND_MS, type Interval } from '../../../shared/time.ts';
+import type { Contention } from './contention.ts';
 
 /** A window longer than this is served by contacts that can be moved inside it. */
 export const LONG_MS = 60 * MINUTE_MS;
@@ -18,19 +19,56 @@ function movable(piece: Interval, minimumMs: number): Interval[] {
   return found;
 }
 
-/**
- * Ways to use a piece of a window: the whole of it and, on a grid, what is left when ends are trimmed. Nothing shorter
- * than the minimum.
- */
-export function variants(piece: Interval, minimumMs: number, gridMs: number | null): Interval[] {
-  const lengthMs = piece.toMs - piece.fromMs;
-  if (lengthMs < minimumMs) return [];
-  if (lengthMs > LONG_MS) return movable(piece, minimumMs);
-  if (gridMs === null) return [piece];
-  const steps = Math.floor((lengthMs - minimumMs) / gridMs);
-  const found: Interval[] = [];
-  for (let early = 0; early <= steps; early++)
-    for (let late = 0; early + late <= steps; late++)
-      found.push({ fromMs: piece.fromMs + early * gridMs, toMs: piece.toMs - late * gridMs });
+export interface TrimQuestion {
+  piece: Interval;
+  minimumMs: number;
+  contention: Contention;
+  /** What the leg holds before and after itself, ms. */
+  margins: readonly [number, number];
+  /** Hand-over instants lie on multiples of it; null: no trims. */
+  gridMs: number | null;
+}
+
+const upToSecond = (ms: number): number => Math.ceil(ms / SECOND_MS) * SECOND_MS;
+const downToSecond = (ms: number): number => Math.floor(ms / SECOND_MS) * SECOND_MS;
+
+/** Grid instants of an interval with its ends. */
+function instants({ fromMs, toMs }: Interval, gridMs: number): number[] {
+  const found = [fromMs];
+  for (let ms = Math.floor(fromMs / gridMs + 1) * gridMs; ms < toMs; ms += gridMs) found.push(ms);
+  found.push(toMs);
   return found;
+}
+
+/**
+ * Where the leg may begin and end. A channel changes hands at an instant T of the grid: one leg ends a tear-down before
+ * T, the next begins a set-up after it, so nothing is lost between them. Beyond a crowd there is nobody to yield to.
+ */
+function ends(question: TrimQuestion, gridMs: number): { starts: number[]; stops: number[] } {
+  const { piece, contention, margins } = question;
+  const [before, after] = margins;
+  const starts = new Set([piece.fromMs]);
+  const stops = new Set([piece.toMs]);
+  const offer = (startMs: number, stopMs: number): void => {
+    if (startMs > piece.fromMs && startMs < piece.toMs) starts.add(startMs);
+    if (stopMs > piece.fromMs && stopMs < piece.toMs) stops.add(stopMs);
+  };
+  for (const crowd of contention.crowds)
+    for (const ms of instants(crowd, gridMs))
+      offer(upToSecond(ms + before), downToSecond(ms - after));
+  for (const meeting of contention.meetings)
+    for (const ms of instants(meeting, gridMs)) offer(upToSecond(ms), downToSecond(ms));
+  return { starts: [...starts], stops: [...stops] };
+}
+
+/** Ways to use a piece: the whole of it and what is left when ends are trimmed; nothing shorter than the minimum. */
+export function variants(question: TrimQuestion): Interval[] {
+  const { piece, minimumMs, gridMs } = question;
+  if (piece.toMs - piece.fromMs < minimumMs) return [];
+  if (piece.toMs - piece.fromMs > LONG_MS) return movable(piece, minimumMs);
+  if (gridMs === null) return [piece];
+  const { starts, stops } = ends(question, gridMs);
+  return starts.flatMap((fromMs) =>
+    stops.flatMap((toMs) => (toMs - fromMs >= minimumMs ? [{ fromMs, toMs }] : [])),
+  );
 }

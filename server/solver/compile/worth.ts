@@ -57,10 +57,14 @@ export function worthOf(context: PlanContext, question: WorthQuestion): number {
   return weight * (seconds(receive) + uplink + quality) + bonus;
 }
 
-/** Worth of a contact that stands. */
-export function contactWorth(context: PlanContext, contact: ContactModel): number {
+/** Worth of a contact. */
+export function contactWorth(
+  context: PlanContext,
+  contact: Omit<ContactModel, 'id'>,
+  unchanged: boolean,
+): number {
   const pass = context.passes.get(contact.passId);
   if (!pass) return 0;
   const uplinkWanted = servicesOf(context.day, pass).some(({ uplink }) => uplink !== 'none');
-  return worthOf(context, { ...contact, pass, uplinkWanted, unchanged: true });
+  return worthOf(context, { ...contact, pass, uplinkWanted, unchanged });
 }

@@ -2,7 +2,12 @@ import type { PlanContext } from '../../../shared/schedule/context.ts';
 import type { ContactModel, PassModel } from '../../../shared/schedule/model.ts';
 import { planLegs } from '../../../shared/schedule/plan-legs.ts';
 import { placeContact } from '../../../shared/schedule/reasons/placement.ts';
+import { judgeRequirements } from '../../../shared/schedule/score/requirements.ts';
 import { nearby } from '../../../shared/schedule/reasons/nearby.ts';
+
+/** Some mission would get more than it wants. */
+const tooMany = ({ day }: PlanContext, contacts: readonly ContactModel[]): boolean =>
+  judgeRequirements(day, contacts).some(({ exceeded }) => exceeded);
 
 /** Takes the passes in an order and gives each the longest contact that still fits: the plans that people make by hand. */
 function placeInOrder(context: PlanContext, passes: readonly PassModel[]): ContactModel[] {
@@ -13,7 +18,8 @@ function placeInOrder(context: PlanContext, passes: readonly PassModel[]): Conta
       pass,
       legs: planLegs(near.context, near.contacts),
     });
-    if (placed) contacts.push({ ...placed, id: `c-${pass.id}` });
+    const contact = placed && { ...placed, id: `c-${pass.id}` };
+    if (contact && !tooMany(context, [...contacts, contact])) contacts.push(contact);
   }
   return contacts;
 }
