@@ -9,6 +9,7 @@ import {
   type PredictedPass,
 } from '../../shared/orbit/pass-search.ts';
 import type { Track } from '../../shared/orbit/track.ts';
+import { openPasses, type OpenPassReasons } from '../../shared/schedule/reasons/open-passes.ts';
 import { makeFacts } from '../../shared/schedule/facts/make-facts.ts';
 import type { ContactModel, DayModel, Facts, Violation } from '../../shared/schedule/model.ts';
 import { DAY_MS, HOUR_MS, dayStart } from '../../shared/time.ts';
@@ -80,3 +81,9 @@ export const computeFacts = (day: DayModel): Facts => makeFacts(day);
 
 export const verify = (input: { day: DayModel; contacts: ContactModel[] }): Violation[] =>
   verifyPlan(input.day, input.contacts);
+
+export const findReasons = (input: {
+  day: DayModel;
+  facts: Facts;
+  contacts: ContactModel[];
+}): OpenPassReasons[] => openPasses(input.day, input.facts, input.contacts);

@@ -97,6 +97,8 @@ export const NextContact = z.strictObject({
   maxElevationDeg: z.number(),
   receiveChannelId: Id.nullable(),
   transmitChannelId: Id.nullable(),
+  transmitFromUtc: Instant.nullable(),
+  transmitToUtc: Instant.nullable(),
   planId: Id.nullable(),
   displaces: z.array(Contact.pick({ id: true, satelliteName: true, missionId: true })),
   words: z.string(),

@@ -167,7 +167,13 @@ export const OpenPass = z.strictObject({
   standing: z.enum(['free', 'stopped', 'unusable']),
   reasons: z.array(PassReason),
   wouldFree: z.array(
-    z.strictObject({ kind: z.string(), words: z.string(), edits: z.array(z.unknown()) }),
+    z.strictObject({
+      kind: z.string(),
+      words: z.string(),
+      /** Contact minutes that others lose by it. */
+      costMinutes: z.number(),
+      edits: z.array(z.unknown()),
+    }),
   ),
 });
 export type OpenPass = z.infer<typeof OpenPass>;

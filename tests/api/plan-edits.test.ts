@@ -1,8 +1,8 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { EditResult } from '../../shared/schemas/edit.ts';
-import type { Plan } from '../../shared/schemas/plan.ts';
+import type { EditResult, NextContact } from '../../shared/schemas/edit.ts';
+import type { OpenPass, Plan } from '../../shared/schemas/plan.ts';
 import { PlanStory, seen } from '../support/plan-story.ts';
-import { predictSmallWorld, startTestApp, type TestApp } from '../support/test-app.ts';
+import { NOW, predictSmallWorld, startTestApp, type TestApp } from '../support/test-app.ts';
 
 let test: TestApp;
 let story: PlanStory;
@@ -335,8 +335,19 @@ describe('reading a plan', () => {
     expect(windows.length).toBeGreaterThan(10);
     expect(busy.length).toBeGreaterThan(8);
     const open = await scheduler.get(`${path}/open-passes`).expect(200);
-    const { items } = open.body as { items: { standing: string }[] };
+    const { items } = open.body as { items: OpenPass[] };
     expect(items.map((one) => one.standing)).toContain('unusable');
+    for (const one of items.filter(({ standing }) => standing !== 'free'))
+      expect(one.reasons[0]?.message).toMatch(/\w{3,}.*\./);
+    // What is said to free a pass does it: tried on the plan without changing it.
+    const [helped] = items.flatMap((one) => one.wouldFree.filter(({ edits }) => edits.length > 0));
+    if (helped) {
+      const tried = await scheduler
+        .post(`${path}/edits?dryRun=true`)
+        .send({ edits: helped.edits })
+        .expect(200);
+      expect(tried.body).toMatchObject({ violations: [] });
+    }
     const changes = await scheduler.get(`${path}/changes`).expect(200);
     expect(changes.body).toMatchObject({ againstRevision: 0, removed: [], changed: [] });
     await scheduler.get(`${path}/changes?against=7`).expect(404);
@@ -356,5 +367,23 @@ describe('reading a plan', () => {
     ]);
     expect(JSON.stringify(plan)).not.toContain(test.missions.birch);
     expect(JSON.stringify(plan)).not.toContain('Birch');
+    const lead = await test.as('lead');
+    const open = await lead.get(`/api/plans/${story.planId}/open-passes`).expect(200);
+    expect((open.body as { items: object[] }).items.length).toBeGreaterThan(0);
+    expect(JSON.stringify(open.body)).not.toContain('Birch');
+  });
+
+  it('next contacts of a satellite come soonest first, with what each displaces', async () => {
+    const operator = await test.as('operator');
+    const path = `/api/satellites/${test.satellites['Birch 1']}/next-contacts?stationId=${test.stationId}`;
+    const { body } = await operator.get(`${path}&uplink=true`).expect(200);
+    const { items } = body as { items: NextContact[] };
+    expect(items.length).toBeGreaterThan(3);
+    const begins = items.map((one) => Date.parse(one.fromUtc));
+    expect(begins).toEqual([...begins].sort((a, b) => a - b));
+    expect(begins[0]).toBeGreaterThan(NOW);
+    expect(items.some((one) => one.transmitChannelId !== null)).toBe(true);
+    await (await test.as('lead')).get(path).expect(403);
+    await operator.get(path.split('?')[0] ?? '').expect(400);
   });
 });

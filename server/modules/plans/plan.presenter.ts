@@ -144,7 +144,7 @@ export const presentSummary = ({
     version: plan.contentVersion,
     state: plan.state,
     limitOfDayDb: plan.limitOfDayDb,
-    needsAttention: plan.needsAttention ?? null,
+    needsAttention: attention(plan, visible.everything),
     returned:
       plan.state === 'draft' && returned
         ? {
@@ -166,6 +166,12 @@ export const presentSummary = ({
     }),
     signableMissionIds,
   };
+};
+
+/** The sentence names satellites of every mission; a lead reads only that there is something. */
+const attention = (plan: DayPlan, seesEverything: boolean): string | null => {
+  if (plan.needsAttention == null) return null;
+  return seesEverything ? plan.needsAttention : 'A change elsewhere breaks a rule of this plan.';
 };
 
 const UNIT = { contacts: 'contacts', minutes: 'min', gap: 'min', volume: 'Mbit' } as const;
