@@ -1,4 +1,5 @@
-import type { ElementSetReading } from './element-set.ts';
+import type { ElementFormat, ElementSetReading } from './element-set.ts';
+import { readOmmText, type OmmFormat } from './omm-file.ts';
 import { readTleText } from './tle-file.ts';
 
 export type { ElementFault, ElementSetReading, ReadElementSet } from './element-set.ts';
@@ -68,29 +69,35 @@ function textOf(bytes: Uint8Array): string | ElementSetReading {
   return new TextDecoder().decode(bytes);
 }
 
-/** Another kind of file than two-line elements, recognised by its first characters or its name. */
-function otherKind(text: string, fileName: string): string | null {
+const EXTENSIONS: Readonly<Record<string, OmmFormat>> = {
+  json: 'omm-json',
+  csv: 'omm-csv',
+  kvn: 'omm-kvn',
+  omm: 'omm-kvn',
+  xml: 'omm-xml',
+};
+
+/** The form of a file: by its first characters where they are telling, else by its name. */
+function formatOf(text: string, fileName: string): ElementFormat {
   const start = text.trimStart();
-  if (/^[[{]/.test(start) || /\.json$/i.test(fileName)) return 'JSON';
-  if (/^CCSDS_/.test(start) || /\.(kvn|omm|oem)$/i.test(fileName)) return 'KVN';
-  if (/\.csv$/i.test(fileName) || /^[A-Z_]+,[A-Z_]+,/.test(start)) return 'CSV';
-  if (/^<\?xml|^<(\w+:)?(omm|ndm)\b/.test(start) || /\.xml$/i.test(fileName)) return 'XML';
-  return null;
+  if (/^[[{]/.test(start)) return 'omm-json';
+  if (/^CCSDS_\w+_VERS\b/.test(start)) return 'omm-kvn';
+  if (/^<(\?xml\b|(\w+:)?(omm|ndm)\b)/.test(start)) return 'omm-xml';
+  if (/^"?[A-Z_]+"?[,;]"?[A-Z_]+"?[,;]/.test(start)) return 'omm-csv';
+  const extension = /\.(\w+)$/.exec(fileName.toLowerCase())?.[1] ?? '';
+  return EXTENSIONS[extension] ?? 'tle';
 }
 
 /**
- * Reads an uploaded element file. Pure and without a clock: the age of a set and its trial propagation are judged
- * afterwards (`element-acceptance.ts`). Sets are judged one by one; a fault of structure makes the whole unreadable.
+ * Reads an uploaded element file: two-line elements, or orbit mean-elements messages in JSON, CSV, KVN or XML. Pure and
+ * without a clock: the age of a set and its trial propagation are judged afterwards (`element-acceptance.ts`). Sets are
+ * judged one by one; a fault of structure makes the whole unreadable.
  */
 export function readElementSets(bytes: Uint8Array, fileName: string): ElementSetReading {
   const text = textOf(bytes);
   if (typeof text !== 'string') return text;
   if (text.trim() === '')
     return unreadable(1, 1, 'FILE_EMPTY', 'The file is empty; choose a file with element sets.');
-  const kind = otherKind(text, fileName);
-  if (kind !== null) {
-    const reason = `This is a ${kind} file; only two-line element files (TLE, with or without names) are read. Fetch the sets in that form.`;
-    return unreadable(1, 1, 'FILE_TYPE', reason);
-  }
-  return readTleText(text);
+  const format = formatOf(text, fileName);
+  return format === 'tle' ? readTleText(text) : readOmmText(text, format);
 }

@@ -9,6 +9,7 @@ export interface ReadElementSet {
   catalogNumber: number;
   /** Exact epoch, ms UTC, fractional. */
   epochMs: number;
+  /** As in the file; for other forms than two-line the same elements in that form (`two-line-form.ts`). */
   line1: string;
   line2: string;
   meanMotionRevPerDay: number;
@@ -30,8 +31,11 @@ export interface ElementFault {
   reason: string;
 }
 
+/** Two-line elements, or orbit mean-elements messages (CCSDS 502.0-B-3) in one of their forms. */
+export type ElementFormat = 'tle' | 'omm-json' | 'omm-csv' | 'omm-kvn' | 'omm-xml';
+
 export interface ElementSetReading {
-  format: 'tle';
+  format: ElementFormat;
   accepted: ReadElementSet[];
   refused: ElementFault[];
   /** The structure of the file is at fault: nothing in it is used. */

@@ -144,3 +144,21 @@ export function catalogNumberOf(text: string): number | 'TLE_ALPHA5_LETTER' | 'T
   const letter = ALPHA_5.indexOf(text.charAt(0));
   return letter < 0 ? 'TLE_ALPHA5_LETTER' : (letter + 10) * 10_000 + Number(text.slice(1));
 }
+
+/** A number in the five columns, as Alpha-5 where needed; 00000 when the form cannot hold it. */
+export function catalogText(number: number): string {
+  if (number < 100_000) return String(number).padStart(5, '0');
+  const letter = ALPHA_5.charAt(Math.floor(number / 10_000) - 10);
+  return letter === '' ? '00000' : `${letter}${String(number % 10_000).padStart(4, '0')}`;
+}
+
+/** A value in the form with an assumed leading point: ` 56789-4` for 0.000056789; below 1e-10 it is zero. */
+export function exponentText(value: number): string {
+  const [size, sign] = [Math.abs(value), value < 0 ? '-' : ' '];
+  if (size < 1e-10) return ' 00000+0';
+  // toExponential writes 5.6789e-5; the assumed point stands one place further left.
+  const [digits = '', exponent = '0'] = size.toExponential(4).split('e');
+  const shifted = Number(exponent) + 1;
+  const mantissa = digits.replace('.', '');
+  return `${sign}${mantissa}${shifted < 0 ? '-' : '+'}${Math.abs(shifted)}`;
+}

@@ -1,4 +1,5 @@
-import type { ElementFault, ElementSetReading, ReadElementSet } from './element-set.ts';
+import { collectSets } from './collect-sets.ts';
+import type { ElementFault, ElementSetReading } from './element-set.ts';
 import { NAME_LENGTH } from './tle-columns.ts';
 import { readTlePair, type FileLine, type TlePair } from './tle-set.ts';
 
@@ -96,18 +97,6 @@ function cut(lines: readonly FileLine[]): Cutting {
   return cutting;
 }
 
-function duplicateFault(
-  set: ReadElementSet,
-  known: ReadElementSet | undefined,
-): ElementFault | null {
-  if (!known) return null;
-  const same = known.line1 === set.line1 && known.line2 === set.line2;
-  const reason = same
-    ? `The same set stands in line ${known.line} already; that one is used. Remove this one.`
-    : `Line ${known.line} gives another orbit for the same object and epoch; remove one of the two.`;
-  return { line: set.line, column: 1, code: 'DUPLICATE_SET', reason };
-}
-
 /** Reads a text as two-line elements, with or without name lines, judged set by set. */
 export function readTleText(text: string): ElementSetReading {
   const lines = text
@@ -117,19 +106,6 @@ export function readTleText(text: string): ElementSetReading {
   const { pairs, structure, single } = cut(lines);
   if (structure.length > 0)
     return { format: 'tle', accepted: [], refused: structure, unreadable: true };
-  const refused = [...single];
-  const accepted = new Map<string, ReadElementSet>();
-  for (const pair of pairs) {
-    const result = readTlePair(pair);
-    if ('code' in result) {
-      refused.push(result);
-      continue;
-    }
-    const key = `${result.catalogNumber} ${result.epochMs}`;
-    const wrong = duplicateFault(result, accepted.get(key));
-    if (wrong) refused.push(wrong);
-    else accepted.set(key, result);
-  }
-  refused.sort((a, b) => a.line - b.line);
-  return { format: 'tle', accepted: [...accepted.values()], refused, unreadable: false };
+  const { accepted, refused } = collectSets([...single, ...pairs.map(readTlePair)]);
+  return { format: 'tle', accepted, refused, unreadable: false };
 }
