@@ -23,7 +23,7 @@ const run = (
     },
   );
 
-const day = inventedDay({ seed: 6, satellites: 14, receiveChannels: 2, hours: [0, 10] });
+const day = inventedDay({ seed: 6, satellites: 30, receiveChannels: 2, hours: [0, 16] });
 const facts = makeFacts(day);
 const window = (passId: string) => windowOf(facts, passId, 'F1', 'receive');
 
