@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { twoLines } from '../../tests/support/orbit/two-lines.ts';
 import { LARGEST_FILE_BYTES, readElementSets } from './element-reader.ts';
 import type { ElementSetReading } from './element-set.ts';
-import { checksum } from './tle-columns.ts';
+import { checksum } from './element-files/tle-columns.ts';
 
 const read = (text: string, fileName = 'sets.tle'): ElementSetReading =>
   readElementSets(new TextEncoder().encode(text), fileName);

@@ -1,6 +1,6 @@
 import type { ElementFormat, ElementSetReading } from './element-set.ts';
-import { readOmmText, type OmmFormat } from './omm-file.ts';
-import { readTleText } from './tle-file.ts';
+import { readOmmText, type OmmFormat } from './element-files/omm-file.ts';
+import { readTleText } from './element-files/tle-file.ts';
 
 export type { ElementFault, ElementSetReading, ReadElementSet } from './element-set.ts';
 

@@ -9,7 +9,7 @@ export interface ReadElementSet {
   catalogNumber: number;
   /** Exact epoch, ms UTC, fractional. */
   epochMs: number;
-  /** As in the file; for other forms than two-line the same elements in that form (`two-line-form.ts`). */
+  /** As in the file; for other forms than two-line the same elements in that form (`element-files/two-line-form.ts`). */
   line1: string;
   line2: string;
   meanMotionRevPerDay: number;

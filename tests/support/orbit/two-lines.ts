@@ -1,5 +1,5 @@
 /** Writes invented two-line sets for tests, with valid checksums. */
-import { checksum } from '../../../shared/orbit/tle-columns.ts';
+import { checksum } from '../../../shared/orbit/element-files/tle-columns.ts';
 
 export interface InventedOrbit {
   catalogNumber: number;

@@ -1,6 +1,6 @@
 import { instantFault, instantOf } from './ccsds-time.ts';
-import { rangeFaults, type MeanElements, type RangedField } from './element-ranges.ts';
-import type { ElementFault, ReadElementSet } from './element-set.ts';
+import { rangeFaults, type MeanElements, type RangedField } from '../element-ranges.ts';
+import type { ElementFault, ReadElementSet } from '../element-set.ts';
 import type { OmmField, OmmRecord } from './omm-record.ts';
 import { twoLineForm } from './two-line-form.ts';
 

@@ -1,7 +1,7 @@
 import { FormFault } from './text-cursor.ts';
 import { scanJson, type JsonValue } from './json-text.ts';
 import type { OmmField, OmmRecord } from './omm-record.ts';
-import type { ElementFault } from './element-set.ts';
+import type { ElementFault } from '../element-set.ts';
 
 const fieldOf = (value: JsonValue): OmmField =>
   value.kind === 'object' || value.kind === 'array'

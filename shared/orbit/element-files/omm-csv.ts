@@ -1,4 +1,4 @@
-import type { ElementFault } from './element-set.ts';
+import type { ElementFault } from '../element-set.ts';
 import type { OmmField, OmmRecord } from './omm-record.ts';
 import { TextCursor } from './text-cursor.ts';
 

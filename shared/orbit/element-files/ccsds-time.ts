@@ -1,4 +1,4 @@
-import { DAY_MS, HOUR_MS, MINUTE_MS, SECOND_MS } from '../time.ts';
+import { DAY_MS, HOUR_MS, MINUTE_MS, SECOND_MS } from '../../time.ts';
 
 /** Calendar or day-of-year time of CCSDS 301.0 (ASCII A and B), without offset; UTC. */
 const INSTANT = /^(\d{4})-(?:(\d{2})-(\d{2})|(\d{3}))T(\d{2}):(\d{2}):(\d{2})(\.\d+)?Z?$/;

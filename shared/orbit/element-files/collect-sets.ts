@@ -1,4 +1,4 @@
-import type { ElementFault, ReadElementSet } from './element-set.ts';
+import type { ElementFault, ReadElementSet } from '../element-set.ts';
 
 function duplicateFault(
   set: ReadElementSet,

@@ -1,5 +1,5 @@
-import { DAY_MS } from '../time.ts';
-import type { MeanElements } from './element-ranges.ts';
+import { DAY_MS } from '../../time.ts';
+import type { MeanElements } from '../element-ranges.ts';
 import { catalogText, checksum, exponentText } from './tle-columns.ts';
 
 export interface FormElements extends MeanElements {

@@ -1,5 +1,5 @@
 import { collectSets } from './collect-sets.ts';
-import type { ElementFault, ElementFormat, ElementSetReading } from './element-set.ts';
+import type { ElementFault, ElementFormat, ElementSetReading } from '../element-set.ts';
 import { ommRecordsOfCsv } from './omm-csv.ts';
 import { ommRecordsOfJson } from './omm-json.ts';
 import { ommRecordsOfKvn } from './omm-kvn.ts';

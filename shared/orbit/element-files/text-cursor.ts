@@ -1,4 +1,4 @@
-import type { ElementFault } from './element-set.ts';
+import type { ElementFault } from '../element-set.ts';
 
 /** A fault of the file's form, thrown by a scanner and caught by its reader. */
 export class FormFault extends Error {

@@ -1,6 +1,6 @@
-import type { ElementFault, ReadElementSet } from './element-set.ts';
-import { rangeFaults, type MeanElements, type RangedField } from './element-ranges.ts';
-import { epochFault, epochOf } from './epoch.ts';
+import type { ElementFault, ReadElementSet } from '../element-set.ts';
+import { rangeFaults, type MeanElements, type RangedField } from '../element-ranges.ts';
+import { epochFault, epochOf } from '../epoch.ts';
 import {
   BLANK_COLUMNS,
   CATALOG,

@@ -1,5 +1,5 @@
 import { collectSets } from './collect-sets.ts';
-import type { ElementFault, ElementSetReading } from './element-set.ts';
+import type { ElementFault, ElementSetReading } from '../element-set.ts';
 import { NAME_LENGTH } from './tle-columns.ts';
 import { readTlePair, type FileLine, type TlePair } from './tle-set.ts';
 

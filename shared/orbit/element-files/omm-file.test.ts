@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { readElementSets } from './element-reader.ts';
-import type { ElementSetReading } from './element-set.ts';
+import { readElementSets } from '../element-reader.ts';
+import type { ElementSetReading } from '../element-set.ts';
 import { OMM_KEYWORDS } from './omm-record.ts';
 import { exponentText, exponentValue } from './tle-columns.ts';
 import { twoLineForm } from './two-line-form.ts';
