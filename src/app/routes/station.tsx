@@ -9,7 +9,7 @@ import { ErrorState } from '../../components/states.tsx';
 import { ChannelPanel } from '../../features/stations/components/channel-panel.tsx';
 import { ClosurePanel } from '../../features/stations/components/closure-panel.tsx';
 import { FacePanel } from '../../features/stations/components/face-panel.tsx';
-import { InhibitBar } from '../../features/stations/components/inhibit-bar.tsx';
+import { InhibitBar } from '../../components/inhibit-bar.tsx';
 import { StationDialog } from '../../features/stations/components/station-dialog.tsx';
 import { StationFacts } from '../../features/stations/components/station-facts.tsx';
 import { SkySheet } from '../../charts/sky-sheet.tsx';

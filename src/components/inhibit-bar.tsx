@@ -1,13 +1,13 @@
 import { useState } from 'react';
-import type { Station } from '../../../../shared/schemas/station.ts';
-import { useAnnounce } from '../../../components/announcer.tsx';
-import { Button } from '../../../components/button.tsx';
-import { Icon } from '../../../components/icon.tsx';
-import { ReasonDialog } from '../../../components/reason-dialog.tsx';
-import { ErrorNote } from '../../../components/states.tsx';
-import { useMay } from '../../../hooks/use-session.ts';
-import { dateClock } from '../../../lib/format-time.ts';
-import { useEndInhibit, useSetInhibit } from '../../../queries/station-queries.ts';
+import type { Station } from '../../shared/schemas/station.ts';
+import { useAnnounce } from './announcer.tsx';
+import { Button } from './button.tsx';
+import { Icon } from './icon.tsx';
+import { ReasonDialog } from './reason-dialog.tsx';
+import { ErrorNote } from './states.tsx';
+import { useMay } from '../hooks/use-session.ts';
+import { dateClock } from '../lib/format-time.ts';
+import { useEndInhibit, useSetInhibit } from '../queries/station-queries.ts';
 
 /** Transmit inhibit, people at the array: one button, in force at once everywhere, ended by name. */
 export function InhibitBar({ station }: { station: Station }) {
