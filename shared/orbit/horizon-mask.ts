@@ -63,12 +63,13 @@ function knotBefore(profile: MaskProfile, azimuthRad: number): number {
   return low;
 }
 
-/** Elevation of a mask with knots at an azimuth, rad, and its slope there (rad of elevation per rad of azimuth). */
+/** Elevation of a mask at an azimuth, -pi to 2 pi, rad, and its slope there (rad of elevation per rad of azimuth). */
 export function maskAt(
   profile: MaskProfile,
   azimuthRad: number,
 ): { elevation: number; slope: number } {
   const { azimuthsRad, elevationsRad } = profile;
+  if (profile.isUniform) return { elevation: profile.lowestRad, slope: 0 };
   const azimuth = azimuthRad < 0 ? azimuthRad + TURN_RAD : azimuthRad;
   const count = azimuthsRad.length;
   const index = knotBefore(profile, azimuth);
