@@ -1,4 +1,4 @@
-import type { Interval } from '../time.ts';
+import { SECOND_MS, type Interval } from '../time.ts';
 import { maskProfile } from './horizon-mask.ts';
 import { horizonFrame } from './observer.ts';
 import { checkOrbit } from './orbit-checks.ts';
@@ -63,11 +63,23 @@ function refined(orbit: Orbit, query: PassQuery, span: Interval & { isWalked: bo
   }
 }
 
-/** Searches an orbit that ends, or may end, inside the window: SGP4 is walked from the epoch on first. */
+/**
+ * Searches an orbit that ends, or may end, inside the window: SGP4 is walked from the epoch on first. A failure between
+ * two steps of the walk ends the orbit there.
+ */
 function searchWalked(orbit: Orbit, query: PassQuery): Omit<PassSearchResult, 'sgp4Calls'> {
-  const { span, end } = orbitSpan(orbit, query.fromMs, query.toMs);
-  if (!span) return { passes: [], guardViolations: 0, orbitEnd: end };
-  return { ...refined(orbit, query, { ...span, isWalked: true }), orbitEnd: end };
+  let { span, end } = orbitSpan(orbit, query.fromMs, query.toMs);
+  while (span) {
+    try {
+      return { ...refined(orbit, query, { ...span, isWalked: true }), orbitEnd: end };
+    } catch (error) {
+      if (!(error instanceof OrbitLost)) throw error;
+      end = { atMs: error.atMs, code: error.code };
+      const toMs: number = Math.min(span.toMs, error.atMs) - SECOND_MS;
+      span = toMs > span.fromMs ? { fromMs: span.fromMs, toMs } : null;
+    }
+  }
+  return { passes: [], guardViolations: 0, orbitEnd: end };
 }
 
 /**

@@ -64,7 +64,7 @@ export function exactExtreme(search: Search, run: Run, extreme: Extreme): Node {
       const exact = isNear ? moved(node, search.frame, seconds) : node;
       return (extreme.exact = exact);
     }
-    ms += 1000 * seconds;
+    ms = Math.max(search.fromMs, Math.min(search.toMs, ms + 1000 * seconds));
   }
 }
 
