@@ -20,13 +20,15 @@ const POINTS = 'N NNE NE ENE E ESE SE SSE S SSW SW WSW W WNW NW NNW'.split(' ');
 /** Point of the compass nearest to an azimuth. */
 export const compassPoint = (azimuthDeg: number): string =>
   POINTS[Math.round(azimuthDeg / 22.5) % 16] ?? 'N';
+/** `NNE to W`. */
+export const directionWords = (pass: { aosAzimuthDeg: number; losAzimuthDeg: number }): string =>
+  `${compassPoint(pass.aosAzimuthDeg)} to ${compassPoint(pass.losAzimuthDeg)}`;
 /** A pass in words: `max 54°, NNE to W`. */
 export const passWords = (pass: {
   maxElevationDeg: number;
   aosAzimuthDeg: number;
   losAzimuthDeg: number;
-}): string =>
-  `max ${degrees(pass.maxElevationDeg)}, ${compassPoint(pass.aosAzimuthDeg)} to ${compassPoint(pass.losAzimuthDeg)}`;
+}): string => `max ${degrees(pass.maxElevationDeg)}, ${directionWords(pass)}`;
 
 /** `1 contact`, `2 contacts`. */
 export const counted = (count: number, one: string, many = `${one}s`): string =>

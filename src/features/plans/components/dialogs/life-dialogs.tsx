@@ -1,0 +1,278 @@
+import { useState } from 'react';
+import { useNavigate } from 'react-router-dom';
+import { useAnnounce } from '../../../../components/announcer.tsx';
+import { Button } from '../../../../components/button.tsx';
+import { Dialog } from '../../../../components/dialog.tsx';
+import { TextAreaField, TextField } from '../../../../components/field.tsx';
+import { Facts } from '../../../../components/facts.tsx';
+import { ReasonDialog } from '../../../../components/reason-dialog.tsx';
+import { ErrorNote } from '../../../../components/states.tsx';
+import { ApiError } from '../../../../lib/api-error.ts';
+import { asNumber } from '../../../../lib/form-errors.ts';
+import { decimals } from '../../../../lib/format-number.ts';
+import { dateClock, shortDay } from '../../../../lib/format-time.ts';
+import {
+  useReleasePlan,
+  useRevisePlan,
+  useSetLimitOfDay,
+  useSubmitPlan,
+  useWithdrawPlan,
+} from '../../../../queries/plan-queries.ts';
+import { usePlanDesk } from '../../hooks/plan-desk.ts';
+import { ViolationList } from '../violation-list.tsx';
+
+interface Props {
+  onClose: () => void;
+}
+
+/** What stands in the way: broken rules by name, or the words of the server. */
+function Refusal({ error }: { error: Error | null }) {
+  if (!error) return null;
+  const violations = error instanceof ApiError ? error.violations : [];
+  return (
+    <div className="mt-3 flex flex-col gap-2">
+      <ErrorNote error={error} />
+      {violations.length > 0 && (
+        <div
+          className="max-h-60 overflow-y-auto rounded-control border border-line px-3 py-2"
+          tabIndex={0}
+          role="region"
+          aria-label="Broken rules"
+        >
+          <ViolationList violations={violations} />
+        </div>
+      )}
+    </div>
+  );
+}
+
+export function SubmitDialog({ onClose }: Props) {
+  const { plan } = usePlanDesk();
+  const submit = useSubmitPlan();
+  const announce = useAnnounce();
+  const { score } = plan;
+  const send = (): void =>
+    submit.mutate(plan, {
+      onSuccess: (after) => {
+        announce(
+          after.state === 'approved'
+            ? 'The plan is approved: nobody has to sign.'
+            : 'The plan is in review.',
+        );
+        onClose();
+      },
+    });
+  return (
+    <Dialog
+      open
+      onClose={onClose}
+      title={`Submit ${shortDay(plan.day)}, revision ${plan.revision}`}
+      description="Every rule is judged again. Then the missions’ leads are asked to sign."
+      footer={
+        <>
+          <Button onClick={onClose}>Keep it a draft</Button>
+          <Button variant="primary" busy={submit.isPending} onClick={send}>
+            Submit for sign-off
+          </Button>
+        </>
+      }
+    >
+      <Facts
+        rows={[
+          ['Contacts of passes', `${score.contacts} of ${score.passes}`],
+          ['Requirements met', String(score.requirementsMet)],
+          ['Requirements short', String(score.requirementsShort)],
+          ['Warnings', String(plan.warnings.length)],
+          ['Signatures due', `${dateClock(Date.parse(plan.cutOffUtc))} UTC`],
+        ]}
+      />
+      <Refusal error={submit.error} />
+    </Dialog>
+  );
+}
+
+export function WithdrawDialog({ onClose }: Props) {
+  const { plan } = usePlanDesk();
+  const withdraw = useWithdrawPlan();
+  const announce = useAnnounce();
+  const needsReason = plan.state === 'approved';
+  return (
+    <ReasonDialog
+      open
+      onClose={onClose}
+      title="Withdraw the plan to draft"
+      description={
+        needsReason
+          ? 'The leads have approved it; they are told why it comes back.'
+          : 'The round of sign-off ends. Signatures stand again where nothing of that mission changes.'
+      }
+      label="Why"
+      action="Withdraw plan"
+      least={needsReason ? 3 : 0}
+      busy={withdraw.isPending}
+      error={withdraw.error}
+      onSubmit={(reason) =>
+        withdraw.mutate(
+          { plan, reason },
+          {
+            onSuccess: () => {
+              announce('The plan is a draft again.');
+              onClose();
+            },
+          },
+        )
+      }
+    />
+  );
+}
+
+export function ReleaseDialog({ onClose }: Props) {
+  const { plan } = usePlanDesk();
+  const release = useReleasePlan();
+  const announce = useAnnounce();
+  const missing = plan.signOffs.filter(({ state }) => state === 'pending');
+  const [reason, setReason] = useState('');
+  const send = (): void =>
+    release.mutate(
+      {
+        plan,
+        body: missing.length > 0 ? { reasonForMissingSignatures: reason.trim() } : {},
+      },
+      {
+        onSuccess: () => {
+          announce('The plan is released.');
+          onClose();
+        },
+      },
+    );
+  return (
+    <Dialog
+      open
+      onClose={onClose}
+      title={`Release ${shortDay(plan.day)}, revision ${plan.revision}`}
+      description="Every rule is judged again. The crew, the missions and the exports then go by this plan."
+      footer={
+        <>
+          <Button onClick={onClose}>Not yet</Button>
+          <Button
+            variant="primary"
+            icon="release"
+            busy={release.isPending}
+            disabled={missing.length > 0 && reason.trim().length < 3}
+            onClick={send}
+          >
+            Release plan
+          </Button>
+        </>
+      }
+    >
+      {missing.length === 0 ? (
+        <p className="text-body">Every mission that must sign has signed.</p>
+      ) : (
+        <>
+          <p className="text-body">
+            Not signed: {missing.map(({ missionName }) => missionName).join(', ')}. From the cut-off
+            at {dateClock(Date.parse(plan.cutOffUtc))} UTC on it may be released without them, with
+            a reason that the plan shows.
+          </p>
+          <TextAreaField
+            label="Why without these signatures"
+            className="mt-3"
+            value={reason}
+            onChange={(event) => setReason(event.target.value)}
+          />
+        </>
+      )}
+      <Refusal error={release.error} />
+    </Dialog>
+  );
+}
+
+export function ReviseDialog({ onClose }: Props) {
+  const { plan } = usePlanDesk();
+  const revise = useRevisePlan();
+  const navigate = useNavigate();
+  const send = (): void =>
+    revise.mutate(plan, {
+      onSuccess: (next) => {
+        onClose();
+        void navigate(`/plans/${next.id}`);
+      },
+    });
+  return (
+    <Dialog
+      open
+      onClose={onClose}
+      title={`Begin revision ${plan.revision + 1} of ${shortDay(plan.day)}`}
+      description="It starts as a copy. The released plan stays in force until the new revision is released."
+      footer={
+        <>
+          <Button onClick={onClose}>Stay with this one</Button>
+          <Button variant="primary" busy={revise.isPending} onClick={send}>
+            Begin the revision
+          </Button>
+        </>
+      }
+    >
+      <p className="text-body">
+        Contacts that have begun, or begin within the freeze time, stay as they are.
+      </p>
+      <Refusal error={revise.error} />
+    </Dialog>
+  );
+}
+
+export function LimitDialog({ onClose }: Props) {
+  const { plan, faces } = usePlanDesk();
+  const setLimit = useSetLimitOfDay();
+  const announce = useAnnounce();
+  const [text, setText] = useState(String(plan.limitOfDayDb));
+  const value = asNumber(text);
+  const hardEnd = Math.max(...faces.map(({ hardEndDb }) => hardEndDb));
+  const isGood = value !== null && value > 0 && value <= hardEnd;
+  const send = (): void => {
+    if (!isGood) return;
+    setLimit.mutate(
+      { plan, limitOfDayDb: value },
+      {
+        onSuccess: () => {
+          announce(`The limit of the day is ${decimals(value, 1)} dB.`);
+          onClose();
+        },
+      },
+    );
+  };
+  return (
+    <Dialog
+      open
+      onClose={onClose}
+      title="Limit of the day"
+      description="Every check, run, reason and export of this plan goes by it. The change is recorded."
+      footer={
+        <>
+          <Button onClick={onClose}>Keep {decimals(plan.limitOfDayDb, 1)} dB</Button>
+          <Button
+            variant="primary"
+            busy={setLimit.isPending}
+            disabled={!isGood || value === plan.limitOfDayDb}
+            onClick={send}
+          >
+            Set the limit
+          </Button>
+        </>
+      }
+    >
+      <TextField
+        label="Largest scan loss"
+        unit="dB"
+        inputMode="decimal"
+        className="w-40"
+        value={text}
+        onChange={(event) => setText(event.target.value)}
+        hint={`Hard end of the faces: ${decimals(hardEnd, 1)} dB`}
+        error={isGood ? undefined : `Between 0 and ${decimals(hardEnd, 1)} dB`}
+      />
+      <Refusal error={setLimit.error} />
+    </Dialog>
+  );
+}

@@ -1,0 +1,3 @@
+export function PlanMap() {
+  return null;
+}

@@ -1,0 +1,3 @@
+export function PlanSky() {
+  return null;
+}
