@@ -1,3 +1,4 @@
+import './lib/zod-setup.ts';
 import '@fontsource-variable/atkinson-hyperlegible-next/wght.css';
 import '@fontsource-variable/atkinson-hyperlegible-mono/wght.css';
 import './index.css';
