@@ -13,8 +13,13 @@ import {
   propagate,
   twoline2satrec,
 } from 'satellite.js';
+import { makeTrack } from '../../shared/orbit/make-track.ts';
+import { horizonFrame } from '../../shared/orbit/observer.ts';
 import { searchPasses } from '../../shared/orbit/pass-search.ts';
 import { predictBatch } from '../../shared/orbit/predict-batch.ts';
+import { makeOrbit, propagate as sgp4At } from '../../shared/orbit/propagation.ts';
+import { toHorizon } from '../../shared/orbit/topocentric.ts';
+import { directionAt, lookAnglesAt, lookAnglesOf } from '../../shared/orbit/track.ts';
 import { DAY_MS } from '../../shared/time.ts';
 import { denseLooks, densePasses } from '../accuracy/dense-scan.ts';
 import { allSets, PROOF_MASKS, PROOF_STATIONS, type NamedSet } from '../accuracy/mixed-sets.ts';
@@ -175,6 +180,42 @@ const inWorkers = async (workers: number, withTracks: boolean): Promise<void> =>
   );
 };
 
+const showTracks = (): void => {
+  const elements = sets[0];
+  if (!elements) return;
+  const pass = searchPasses({
+    elements,
+    observer: OBSERVER,
+    mask: MASK_DEG,
+    fromMs: FROM_MS,
+    toMs: FROM_MS + DAY_MS,
+  }).passes[0];
+  if (!pass) return;
+  const track = makeTrack(elements, OBSERVER, pass.aosMs, pass.losMs);
+  const [orbit, frame] = [makeOrbit(elements), horizonFrame(OBSERVER)];
+  const count = 500_000;
+  const perPoint = (look: (ms: number) => unknown): number => {
+    const rounds = [1, 2, 3, 4, 5].map(() =>
+      cpuSeconds(() => {
+        for (let i = 0; i < count; i++) look(pass.aosMs + ((pass.losMs - pass.aosMs) * i) / count);
+      }),
+    );
+    return (median(rounds) / count) * 1e9;
+  };
+  const chain = (ms: number): unknown => {
+    const teme = sgp4At(orbit, ms);
+    return teme && lookAnglesOf(toHorizon(teme, frame, ms));
+  };
+  const [direct, direction, look] = [
+    perPoint(chain),
+    perPoint((ms) => directionAt(track, ms)),
+    perPoint((ms) => lookAnglesAt(track, ms)),
+  ];
+  console.log(
+    `a track point: direction ${direction.toFixed(0)} ns, look angles ${look.toFixed(0)} ns; the full chain ${direct.toFixed(0)} ns, ${(direct / direction).toFixed(0)} and ${(direct / look).toFixed(0)} times more`,
+  );
+};
+
 const prove = (every: number): void => {
   let [agreed, missed, extra, worstMs] = [0, 0, 0, 0];
   for (const elements of sets.filter((_, index) => index % every === 0)) {
@@ -213,6 +254,7 @@ const prove = (every: number): void => {
 if (isMainThread) {
   compareWithNaive();
   showLinearity();
+  showTracks();
   await inWorkers(2, false);
   await inWorkers(2, true);
   const proof = Number(process.env.PROOF ?? 0);
