@@ -82,10 +82,13 @@ function withCurrent(
 /** Steps of the hand-over instants, ms, the finest first. */
 const GRIDS_MS = [20_000, 30_000, 60_000, 120_000, 240_000];
 /** So many columns are solved in a second or so at ordinary load. */
-const COLUMN_BUDGET = 8000;
+const COLUMN_BUDGET = 5000;
 
-/** The finest grid that stays within the budget; the coarsest one otherwise. */
-function chooseGrid(pieces: readonly PassPieces[], contentionOf: Cutting['contentionOf']): number {
+/** The finest grid that stays within the budget; none where even the coarsest one does not: then pieces stay whole. */
+function chooseGrid(
+  pieces: readonly PassPieces[],
+  contentionOf: Cutting['contentionOf'],
+): number | null {
   const fits = (gridMs: number): boolean => {
     let count = 0;
     for (const one of pieces) {
@@ -94,7 +97,7 @@ function chooseGrid(pieces: readonly PassPieces[], contentionOf: Cutting['conten
     }
     return true;
   };
-  return GRIDS_MS.find(fits) ?? GRIDS_MS.at(-1) ?? 240_000;
+  return GRIDS_MS.find(fits) ?? null;
 }
 
 const contends = (pieces: readonly PassPieces[], contentionOf: Cutting['contentionOf']): boolean =>
