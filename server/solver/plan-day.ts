@@ -146,7 +146,9 @@ function resultOf(
   const locksSetAside = setAside.map((one) => lockWords(context, one));
   const gridSeconds = compiled.gridMs && compiled.gridMs / 1000;
   const { timeLimitSeconds: limitSeconds } = input;
-  const proof = { provenance, gap, levels: solved.levels, limitSeconds, gridSeconds };
+  const { wholeOnly } = compiled;
+  const { levels } = solved;
+  const proof = { provenance, gap, levels, limitSeconds, gridSeconds, wholeOnly };
   return {
     contacts,
     objective,

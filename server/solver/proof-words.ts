@@ -14,10 +14,19 @@ export interface Proof {
   levels: readonly LevelResult[];
   limitSeconds: number;
   gridSeconds: number | null;
+  /** Something contends, but windows were used whole: plans with trimmed ones were not compared. */
+  wholeOnly: boolean;
 }
 
-function quality({ provenance, gap, gridSeconds }: Proof): string {
-  const grid = gridSeconds === null ? '' : ` on a ${gridSeconds} s grid`;
+/** Among which plans the best was proven. */
+const basis = ({ gridSeconds, wholeOnly }: Proof): string => {
+  if (gridSeconds !== null) return ` on a ${gridSeconds} s grid`;
+  return wholeOnly ? ' with windows used whole' : '';
+};
+
+function quality(proof: Proof): string {
+  const { provenance, gap, wholeOnly } = proof;
+  const grid = `${basis(proof)}${wholeOnly ? ', then fitted to the second' : ''}`;
   const far = gap === null ? 'how far from the best is not known' : `${gapWords(gap)}${grid}`;
   if (provenance === 'proven')
     return gap !== null && gap > 1e-6 ? `Proven: ${far}.` : `Proven best${grid}.`;
@@ -42,7 +51,7 @@ function minimums(context: PlanContext, contacts: readonly SolvedContact[], proo
     unmet === 1 ? '1 thing asked for is not met' : `${unmet} things asked for are not met`;
   const proven = proof.levels.every((level) => level.proven);
   return proven
-    ? `${count}; no plan does better (proven).`
+    ? `${count}; no plan${basis(proof)} does better (proven).`
     : `${count}; a plan that does better is not ruled out.`;
 }
 

@@ -40,8 +40,10 @@ export interface CompiledDay {
   fixed: FixedPlan;
   /** Columns that keep a contact of the current plan. */
   kept: number[];
-  /** Step of the hand-over instants of trimmed contacts; null: nothing contends, so nothing is trimmed. */
+  /** Step of the hand-over instants of trimmed contacts; null: nothing is trimmed. */
   gridMs: number | null;
+  /** Something contends, but no grid fits the budget: pieces are used whole. */
+  wholeOnly: boolean;
 }
 
 /** A pass with an hours-long window may bear several contacts. */
@@ -111,17 +113,17 @@ const contends = (pieces: readonly PassPieces[], contentionOf: Cutting['contenti
 function optionsOfDay(
   question: CompileQuestion,
   setting: CompileSetting,
-): { options: Option[]; gridMs: number | null } {
+): { options: Option[]; gridMs: number | null; wholeOnly: boolean } {
   const open = openPasses(question, setting.fixed);
   const pieces = open.flatMap((pass) => piecesOfPass(setting, pass) ?? []);
   const contentionOf = findContention(setting, pieces);
-  const chosen = (): number | null =>
-    contends(pieces, contentionOf) ? chooseGrid(pieces, contentionOf) : null;
+  const contested = contends(pieces, contentionOf);
+  const chosen = (): number | null => (contested ? chooseGrid(pieces, contentionOf) : null);
   const gridMs = question.gridMs === undefined ? chosen() : question.gridMs;
   const options = pieces.flatMap((one) =>
     withCurrent(question, setting, one.pass, optionsOfPass(one, { contentionOf, gridMs })),
   );
-  return { options, gridMs };
+  return { options, gridMs, wholeOnly: contested && gridMs === null };
 }
 
 function openPasses({ context, passes }: CompileQuestion, fixed: FixedPlan): PassModel[] {
@@ -209,7 +211,7 @@ export function compileDay(question: CompileQuestion): CompiledDay {
   const groups = channelGroups(context.day, question.apart);
   const fixed = fixedPlan(context, question.fixed);
   const setting = { context, fixed, groups };
-  const { options, gridMs } = optionsOfDay(question, setting);
+  const { options, gridMs, wholeOnly } = optionsOfDay(question, setting);
   const families = [...new Set(options.map(({ pass }) => pass.id))];
   const numbering = {
     groups,
@@ -229,5 +231,5 @@ export function compileDay(question: CompileQuestion): CompiledDay {
     ...askedOfDay(context, options, question.fixed),
   };
   const kept = [...options.keys()].filter((index) => options[index]?.keeps);
-  return { assignment, options, groups, fixed, kept, gridMs };
+  return { assignment, options, groups, fixed, kept, gridMs, wholeOnly };
 }
