@@ -261,7 +261,7 @@ export const MISSIONS: DemoMission[] = [
     priority: 3,
     leads: ['lead2'],
     requirements: [
-      line({ what: 'contacts', least: 4, minimumDurationSeconds: 240, uplink: 'wanted' }),
+      line({ what: 'contacts', least: 4, minimumDurationSeconds: 180, uplink: 'wanted' }),
       line({ what: 'minutes', appliesTo: 'together', least: 120, uplink: 'wanted' }),
     ],
   },
@@ -272,8 +272,8 @@ export const MISSIONS: DemoMission[] = [
     priority: 2,
     leads: ['lead2'],
     requirements: [
-      line({ what: 'contacts', least: 3 }),
-      line({ what: 'minutes', appliesTo: 'together', least: 150 }),
+      line({ what: 'contacts', least: 2 }),
+      line({ what: 'minutes', appliesTo: 'together', least: 120 }),
     ],
   },
   {
@@ -293,7 +293,15 @@ export const MISSIONS: DemoMission[] = [
     series: 4,
     priority: 2,
     leads: ['lead', 'lead2'],
-    requirements: [line({ what: 'contacts', least: 3, uplink: 'required', leastUplinkMinutes: 2 })],
+    requirements: [
+      line({
+        what: 'contacts',
+        least: 2,
+        minimumDurationSeconds: 120,
+        uplink: 'required',
+        leastUplinkMinutes: 2,
+      }),
+    ],
   },
   {
     name: 'Brindle',

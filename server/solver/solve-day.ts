@@ -50,7 +50,14 @@ function lastPlan(
 ): SolveResult {
   const context = planContext(input.day, input.facts);
   const limitSeconds = input.timeLimitSeconds;
-  const proof = { provenance, gap: null, levels: [], limitSeconds, gridSeconds: null };
+  const proof = {
+    provenance,
+    gap: null,
+    levels: [],
+    limitSeconds,
+    gridSeconds: null,
+    wholeOnly: false,
+  };
   return {
     contacts,
     objective,
