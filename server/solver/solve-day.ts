@@ -67,7 +67,6 @@ function lastPlan(
     seconds,
     columns: 0,
     gridSeconds: null,
-    wholeOnly: false,
     words: proofWords(context, contacts, proof, []),
     changes: changesOf(context, input.current, contacts),
     locksSetAside: [],
