@@ -273,7 +273,7 @@ export const MISSIONS: DemoMission[] = [
     leads: ['lead2'],
     requirements: [
       line({ what: 'contacts', least: 2 }),
-      line({ what: 'minutes', appliesTo: 'together', least: 120 }),
+      line({ what: 'minutes', appliesTo: 'together', least: 110 }),
     ],
   },
   {
@@ -284,7 +284,7 @@ export const MISSIONS: DemoMission[] = [
     leads: ['lead'],
     requirements: [
       line({ what: 'contacts', least: 4, uplink: 'required', leastUplinkMinutes: 2 }),
-      line({ what: 'gap', most: 480, uplink: 'required', leastUplinkMinutes: 2 }),
+      line({ what: 'gap', most: 720, uplink: 'required', leastUplinkMinutes: 2 }),
     ],
   },
   {
@@ -296,7 +296,8 @@ export const MISSIONS: DemoMission[] = [
     requirements: [
       line({
         what: 'contacts',
-        least: 2,
+        appliesTo: 'together',
+        least: 6,
         minimumDurationSeconds: 120,
         uplink: 'required',
         leastUplinkMinutes: 2,
