@@ -51,7 +51,8 @@ function climbRate(run: Run, ms: number): number {
 /**
  * The extreme from SGP4: one call as a rule, because the approximation is some milliseconds off. The rest of the way, at
  * most `reachS`, goes with the acceleration. The zero is that of the elevation rate by SGP4's velocity; for high orbits,
- * whose elevation is flat there, it may lie a few seconds off the maximum of the positions (below 1e-4 deg).
+ * whose elevation is flat there, it may lie a few seconds off the maximum of the positions (below 1e-4 deg), and in the
+ * last revolutions of a decaying orbit up to 0.03 deg.
  */
 export function exactExtreme(search: Search, run: Run, extreme: Extreme): Node {
   if (extreme.exact) return extreme.exact;
