@@ -41,6 +41,7 @@ export function passes(inputs: PassInputs): { items: object[]; sgp4Calls: number
 }
 
 export { readElementSets };
+export { quantity } from './quantities/quantity.ts';
 
 /** Assignment instances of the plain format `beam-assign/1`. */
 export const solve = (
