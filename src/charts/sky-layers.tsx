@@ -1,3 +1,4 @@
+import { memo, useMemo } from 'react';
 import { arrowHead, minuteTicks, trackPath, type SkyTrack } from './track-path.ts';
 import { polarPoint, pathThrough } from './polar.ts';
 import type { GroundLayers } from './sky-ground.ts';
@@ -49,40 +50,38 @@ export function Spokes({ radius }: { radius: number }) {
   );
 }
 
-export function KeepOut({
-  ground,
-  hatchId,
-  words,
-}: {
-  ground: GroundLayers;
-  hatchId: string;
-  words: 'none' | 'short' | 'long';
-}) {
+export function KeepOut({ ground, hatchId }: { ground: GroundLayers; hatchId: string }) {
   return (
     <g>
       {ground.keepOut.map((sector, index) => (
         <g key={index}>
           <path d={sector.d} fill={`url(#${hatchId})`} />
           <path d={sector.d} fill="none" stroke="var(--hatch)" strokeDasharray="4 2" />
-          {words !== 'none' && (
-            <text
-              x={sector.middle[0]}
-              y={sector.middle[1] + (words === 'long' ? -2 : 4)}
-              textAnchor="middle"
-              fontSize="12"
-              fill="var(--ink-muted)"
-              className="halo"
-              style={{ '--halo': 'var(--shade)' }}
-            >
-              {words === 'long' ? 'keep-out,' : 'keep-out'}
-              {words === 'long' && (
-                <tspan x={sector.middle[0]} dy="15">
-                  transmit
-                </tspan>
-              )}
-            </text>
-          )}
         </g>
+      ))}
+    </g>
+  );
+}
+
+export function KeepOutWords({ ground }: { ground: GroundLayers }) {
+  const long = ground.radius >= 220;
+  return (
+    <g fontSize="12" fill="var(--ink-muted)" textAnchor="middle">
+      {ground.keepOut.map(({ middle: [x, y] }, index) => (
+        <text
+          key={index}
+          x={x}
+          y={y + (long ? -2 : 4)}
+          className="halo"
+          style={{ '--halo': 'var(--shade)' }}
+        >
+          {long ? 'keep-out,' : 'keep-out'}
+          {long && (
+            <tspan x={x} dy="15">
+              transmit
+            </tspan>
+          )}
+        </text>
       ))}
     </g>
   );
@@ -201,21 +200,32 @@ const near = (interval: Interval, instantMs: number, byMs: number): Interval | n
 };
 
 /** A pass dotted, its contacts solid, a head where it sets. */
-export function TrackLayer({ sky, radius, instantMs = null, faded = false }: TrackProps) {
+export const TrackLayer = memo(function TrackLayer({
+  sky,
+  radius,
+  instantMs = null,
+  faded = false,
+}: TrackProps) {
   const color = sky.color ?? 'var(--ink-faint)';
+  // While the sky plays only the stretch near the instant is drawn anew.
+  const fixed = useMemo(
+    () => ({
+      pass: trackPath(sky.track, sky, radius),
+      head: arrowHead(sky.track, sky.toMs, radius, 7),
+      contacts: sky.contacts.map((contact) => trackPath(sky.track, contact, radius)),
+    }),
+    [sky, radius],
+  );
   return (
     <g fill="none" stroke={color} strokeLinecap="round" opacity={faded ? 0.3 : 1}>
-      <path d={trackPath(sky.track, sky, radius)} strokeWidth="1.1" strokeDasharray="0.1 4" />
-      <path d={arrowHead(sky.track, sky.toMs, radius, 7)} fill={color} stroke="none" />
-      {sky.contacts.map((contact) => {
+      <path d={fixed.pass} strokeWidth="1.1" strokeDasharray="0.1 4" />
+      <path d={fixed.head} fill={color} stroke="none" />
+      {sky.contacts.map((contact, index) => {
         const thick = instantMs === null ? contact : near(contact, instantMs, 90_000);
         const ticks = instantMs === null ? contact : near(contact, instantMs, 260_000);
         return (
           <g key={contact.fromMs} strokeDasharray={sky.dashed ? '5 3' : undefined}>
-            <path
-              d={trackPath(sky.track, contact, radius)}
-              strokeWidth={instantMs === null ? 1.8 : 1.1}
-            />
+            <path d={fixed.contacts[index]} strokeWidth={instantMs === null ? 1.8 : 1.1} />
             {instantMs !== null && thick && (
               <path d={trackPath(sky.track, thick, radius)} strokeWidth="2.4" />
             )}
@@ -225,4 +235,4 @@ export function TrackLayer({ sky, radius, instantMs = null, faded = false }: Tra
       })}
     </g>
   );
-}
+});

@@ -7,6 +7,7 @@ import {
   Contours,
   DiscAndShade,
   KeepOut,
+  KeepOutWords,
   Rim,
   Rings,
   Spokes,
@@ -64,17 +65,14 @@ export function SkySheet({
         <DiscAndShade ground={layers} />
         {large && <Spokes radius={radius} />}
         <Rings radius={radius} steps={large ? [15, 30, 45, 60, 75] : [30, 60]} />
-        <KeepOut
-          ground={layers}
-          hatchId={`${id}-hatch`}
-          words={large ? (radius >= 220 ? 'long' : 'short') : 'none'}
-        />
+        <KeepOut ground={layers} hatchId={`${id}-hatch`} />
         <Contours ground={layers} />
         <Centres ground={layers} size={large ? 1 : 0.7} />
         <path d={layers.land} fill="var(--land)" fillRule="evenodd" />
         <path d={layers.maskEdge} fill="none" stroke="var(--ink-muted)" strokeWidth="0.9" />
       </g>
       <Rim radius={radius} fine={large} />
+      {large && <KeepOutWords ground={layers} />}
       {large && <ElevationFigures radius={radius} />}
       {tracks.map((sky) => (
         <TrackLayer

@@ -48,7 +48,10 @@ export function ContactTable() {
       </EmptyState>
     );
   return (
-    <Table caption="Contacts of the plan" className="bg-surface">
+    <Table
+      caption="Contacts of the plan"
+      className="bg-surface [&_td]:whitespace-nowrap [&_th]:whitespace-nowrap"
+    >
       <thead>
         <tr>
           <Head {...sortOf('satellite')}>Satellite</Head>

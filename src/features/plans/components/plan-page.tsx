@@ -13,6 +13,7 @@ import { ContactTable } from './contact-table.tsx';
 import { PlanDialogs } from './dialogs/plan-dialogs.tsx';
 import { EditFailure } from './edit-failure.tsx';
 import { Inspector } from './inspector/inspector.tsx';
+import { OpenPassTable } from './open-pass-table.tsx';
 import { NotOnPlan } from './not-on-plan.tsx';
 import { PlanBar } from './plan-bar.tsx';
 import { PlanLoadLine } from './plan-load-line.tsx';
@@ -64,40 +65,57 @@ function Body() {
       <div className="border-b border-line bg-surface py-1">
         <PlanLoadLine mode="stretch" />
       </div>
-      <div className="grid min-h-0 flex-1 drawer:grid-cols-[16.125rem_minmax(0,1fr)_21.5rem]">
-        <aside
-          aria-label="Passes that are not on the plan"
-          className="max-h-120 min-h-0 border-line drawer:max-h-none drawer:border-r"
-        >
-          <NotOnPlan />
-        </aside>
-        <div className="flex min-h-120 min-w-0 drawer:min-h-0">
-          {view === 'table' ? (
-            <div
-              className="min-w-0 flex-1 overflow-y-auto"
-              tabIndex={0}
-              role="region"
-              aria-label="Contacts"
-            >
-              <ContactTable />
-            </div>
-          ) : (
-            <CalendarOrEmpty />
-          )}
-        </div>
-        <aside aria-label="Details" className="min-h-0 border-line drawer:border-l">
-          <Inspector />
-        </aside>
-      </div>
+      {view === 'table' ? <TableBody /> : <CalendarBody />}
     </>
   );
 }
+
+function CalendarBody() {
+  return (
+    <div className="grid min-h-0 flex-1 drawer:grid-cols-[16.125rem_minmax(0,1fr)_21.5rem]">
+      <aside
+        aria-label="Passes that are not on the plan"
+        className="max-h-120 min-h-0 border-line drawer:max-h-none drawer:border-r"
+      >
+        <NotOnPlan />
+      </aside>
+      <CalendarOrEmpty />
+      <Details />
+    </div>
+  );
+}
+
+/** Contacts and open passes as tables, with the same actions as the calendar. */
+function TableBody() {
+  return (
+    <div className="grid min-h-0 flex-1 drawer:grid-cols-[minmax(0,1fr)_21.5rem]">
+      <div
+        className="min-w-0 overflow-y-auto bg-surface"
+        tabIndex={0}
+        role="group"
+        aria-label="Tables of the plan"
+      >
+        <h2 className="px-4 pt-3 pb-1 text-section font-semibold">Contacts</h2>
+        <ContactTable />
+        <h2 className="px-4 pt-6 pb-1 text-section font-semibold">Not on the plan</h2>
+        <OpenPassTable />
+      </div>
+      <Details />
+    </div>
+  );
+}
+
+const Details = () => (
+  <aside aria-label="Details" className="min-h-0 border-line drawer:border-l">
+    <Inspector />
+  </aside>
+);
 
 function CalendarOrEmpty() {
   const { plan, allows, openPasses } = usePlanDesk();
   const { open } = usePlanEdits();
   return (
-    <div className="relative flex min-h-0 min-w-0 flex-1">
+    <div className="relative flex min-h-120 min-w-0 drawer:min-h-0">
       <Suspense fallback={<Skeleton rows={10} />}>
         <PlanCalendar />
       </Suspense>

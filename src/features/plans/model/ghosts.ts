@@ -10,6 +10,9 @@ export interface Ghost extends Interval {
   channelId: string;
 }
 
+/** What is shorter could hardly be a contact. */
+const LEAST_MS = 90_000;
+
 type Desk = Pick<PlanDesk, 'openPasses' | 'passes' | 'satellites' | 'columns' | 'legs'>;
 
 function isFree(column: PlanColumn, wanted: Interval, taken: readonly Interval[]): boolean {
@@ -37,7 +40,7 @@ export function ghostsIn(desk: Desk, stretch: Interval): Ghost[] {
     const window = windows.find(({ direction }) => direction === 'receive');
     if (!radio || !window) continue;
     const interval = { fromMs: Date.parse(window.fromUtc), toMs: Date.parse(window.toUtc) };
-    if (!overlaps(interval, stretch)) continue;
+    if (!overlaps(interval, stretch) || interval.toMs - interval.fromMs < LEAST_MS) continue;
     const column = columns.find(
       (one) =>
         one.face.id === window.faceId &&

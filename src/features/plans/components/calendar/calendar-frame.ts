@@ -5,7 +5,7 @@ import type { Ghost } from '../../model/ghosts.ts';
 import type { LegDrag } from '../../hooks/use-leg-drag.ts';
 
 /** Width of the hours at the left, px. */
-export const GUTTER = 58;
+export const GUTTER = 62;
 
 /** Geometry of the calendar, for the parts that react-big-calendar places. */
 export interface CalendarFrame {

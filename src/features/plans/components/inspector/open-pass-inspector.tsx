@@ -123,12 +123,6 @@ function Reasons({ pass }: { pass: OpenPass }) {
           return (
             <li key={index} className="border-t border-line-soft py-1.5 first:border-t-0">
               <span className="font-semibold text-warn-text">{look.word}.</span> {reason.message}
-              {reason.value !== null && reason.limit !== null && (
-                <span className="figures text-ink-muted">
-                  {' '}
-                  ({decimals(reason.value, 2)} against {decimals(reason.limit, 2)} {reason.unit})
-                </span>
-              )}
             </li>
           );
         })}
