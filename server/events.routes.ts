@@ -54,7 +54,7 @@ export class EventStreams {
       if (!isOpenTo) continue;
       const id = event.topic === 'fleet' || event.topic === 'passes' ? '' : event.id;
       const thin = { topic: event.topic, id, version: event.version };
-      response.write(`event: ${event.topic}\ndata: ${JSON.stringify(thin)}\n\n`);
+      response.write(`data: ${JSON.stringify(thin)}\n\n`);
     }
   }
 }
