@@ -1,7 +1,7 @@
 import type { DayModel, Violation } from '../../shared/schedule/model.ts';
 import { finding } from './finding.ts';
 import type { Suspect } from './legs.ts';
-import { sightAt, type Sight } from './sky-check.ts';
+import { sightOf, type Sight } from './sky-check.ts';
 
 /** Sampling sees the end of a window only to the second; used where guard time is counted from it. */
 const STEP_MS = 1000;
@@ -46,7 +46,8 @@ function liesWithin(
     Math.min(pass.toMs, toMs + guardMs),
   );
   const tolerance = guardMs > 0 ? guardMs + STEP_MS : 0;
-  return runs(times, (ms) => condition(sightAt(day, pass, face, direction, ms))).some(
+  const sightAt = sightOf(day, { pass, face, satellite, direction });
+  return runs(times, (ms) => condition(sightAt(ms))).some(
     ([first, last]) => first - tolerance <= fromMs && toMs <= last + tolerance,
   );
 }

@@ -2,6 +2,7 @@ import { directionOnFace } from '../../shared/array/face-geometry.ts';
 import { gratingLobeOnsetRad } from '../../shared/array/hard-end.ts';
 import { scanLossDb } from '../../shared/array/scan-loss.ts';
 import { directionAt, lookAnglesAt } from '../../shared/orbit/track.ts';
+import { marginOf, type Looked } from './link-check.ts';
 import type {
   DayModel,
   Direction,
@@ -59,8 +60,35 @@ function limitDb(day: DayModel, missionId: string): number {
   return loosest ?? day.limitOfDayDb;
 }
 
-/** Looks at one instant of a pass on a face, in one direction of the link. */
-export function sightAt(
+/** The margin floor: the loosest of the mission's own lines, else 0. */
+function floorOfMarginDb(day: DayModel, missionId: string): number {
+  let loosest: number | null = null;
+  for (const line of day.requirements) {
+    if (line.missionId !== missionId) continue;
+    if (line.stationId !== null && line.stationId !== day.station.id) continue;
+    loosest = Math.min(loosest ?? Infinity, line.marginFloorDb ?? 0);
+  }
+  return loosest ?? 0;
+}
+
+/** Looks at a pass on a face, in one direction of the link, instant by instant. */
+export function sightOf(
+  day: DayModel,
+  { pass, face, satellite, direction }: Looked,
+): (ms: number) => Sight {
+  // An uplink needs its downlink at the same time.
+  const directions: Direction[] = direction === 'receive' ? ['receive'] : ['receive', 'transmit'];
+  const margins = directions.map((one) => marginOf(day, { pass, face, satellite, direction: one }));
+  const floorDb = floorOfMarginDb(day, pass.missionId) - TOLERANCE;
+  return (ms) => {
+    const sight = geometryAt(day, pass, face, direction, ms);
+    if (!sight.usable) return sight;
+    return { ...sight, usable: margins.every((marginAt) => marginAt(ms) >= floorDb) };
+  };
+}
+
+/** Geometry alone at one instant. */
+function geometryAt(
   day: DayModel,
   pass: PassModel,
   face: FaceModel,

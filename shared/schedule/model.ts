@@ -145,6 +145,8 @@ export interface PassModel extends Interval {
   tcaMs: number;
   maxElevationDeg: number;
   track: Track;
+  /** Epoch of the element set; without it the link is planned as at its epoch. */
+  elementEpochMs?: number;
 }
 
 export type UplinkNeed = 'required' | 'wanted' | 'none';
@@ -235,11 +237,13 @@ export interface ConflictInterval extends Interval {
   faceId: string;
   direction: Direction;
   passIds: [string, string];
+  /** The pass that is disturbed most; which of the two at the worst instant. */
+  victimPassId?: string;
   worstAtMs: number;
   /** Separation at the worst instant, in half-power beamwidths of the u-v plane. */
   separationHpbw: number;
   requiredHpbw: number;
-  /** Isolation at the worst instant, dB, and what is needed; null where only the separation is judged. */
+  /** C/I of the victim at the worst instant, dB, and what it needs; null where only the separation is judged. */
   isolationDb: number | null;
   requiredDb: number | null;
 }

@@ -4,7 +4,9 @@ import { directionAt } from '../../orbit/track.ts';
 import type { Interval } from '../../time.ts';
 import { dot } from '../../vector.ts';
 import { intersectAll } from '../intervals.ts';
+import { marginFloorDb, passLinks, reductionsOf } from '../link-facts.ts';
 import type {
+  ClosureModel,
   DayModel,
   Direction,
   FaceModel,
@@ -15,6 +17,7 @@ import type {
 import { fitsBand, radioFor } from '../radio-fit.ts';
 import { hardEndRad, largestScanRad, scanLossLimitDb } from '../scan-limits.ts';
 import { extremes } from './crossings.ts';
+import { whereMarginHolds } from './margins.ts';
 import { samplePass, whereDirectionHolds, type Reading, type SampledPass } from './sampling.ts';
 import { scanCondition, sightConditions } from './sight.ts';
 
@@ -24,7 +27,23 @@ interface PassSight {
   sampled: SampledPass;
   satellite: SatelliteModel;
   limitDb: number;
+  marginFloorDb: number;
 }
+
+/** One direction of one face, made once for all passes. */
+interface FaceSide {
+  face: FaceModel;
+  direction: Direction;
+  linkOf: ReturnType<typeof passLinks>;
+  reductions: ClosureModel[];
+}
+
+const faceSide = (day: DayModel, face: FaceModel, direction: Direction): FaceSide => ({
+  face,
+  direction,
+  linkOf: passLinks(day, face, direction),
+  reductions: reductionsOf(day, face, direction),
+});
 
 const whereAllHold = (conditions: readonly Reading[], sampled: SampledPass): Interval[] =>
   conditions
@@ -53,35 +72,48 @@ function lossRange(sampled: SampledPass, face: FaceModel, window: Interval): [nu
 
 function windowsOnFace(
   sight: PassSight,
-  face: FaceModel,
-  direction: Direction,
+  { face, direction, linkOf, reductions }: FaceSide,
   inSight: readonly Interval[],
 ): UsableWindow[] {
   const { sampled } = sight;
+  const link = linkOf(sight.satellite, sampled.pass);
+  if (!link) return [];
   const largestRad = largestScanRad(face, direction, sight.limitDb);
   const inScan = whereDirectionHolds(scanCondition(faceAxes(face).normal, largestRad), sampled);
-  return intersectAll(inSight, inScan).map((interval) => {
-    const [minScanLossDb, maxScanLossDb] = lossRange(sampled, face, interval);
-    const key = { passId: sampled.pass.id, faceId: face.id, direction };
-    return { ...key, ...interval, minScanLossDb, maxScanLossDb, minMarginDb: null };
-  });
+  const margin = { floorDb: sight.marginFloorDb, reductions };
+  return intersectAll(inSight, inScan)
+    .flatMap((interval) => whereMarginHolds(link, interval, margin))
+    .map((part) => {
+      const [minScanLossDb, maxScanLossDb] = lossRange(sampled, face, part);
+      const key = { passId: sampled.pass.id, faceId: face.id, direction };
+      return { ...key, ...part, minScanLossDb, maxScanLossDb };
+    });
 }
 
 /** Receive windows of a pass on every face that fits, and transmit windows inside them. */
-function windowsOfPass(day: DayModel, sight: PassSight): UsableWindow[] {
+function windowsOfPass(
+  day: DayModel,
+  sides: readonly FaceSide[],
+  sight: PassSight,
+): UsableWindow[] {
   const { sampled, satellite } = sight;
   const found: UsableWindow[] = [];
-  const inSight = DIRECTIONS.map((direction) =>
-    whereAllHold(sightConditions(day.station, direction), sampled),
-  );
-  for (const face of day.faces) {
-    if (!fitsBand(face, 'receive', satellite.downlink)) continue;
-    const receive = windowsOnFace(sight, face, 'receive', inSight[0] ?? []);
-    found.push(...receive);
-    const uplink = radioFor(satellite, 'transmit');
-    if (!uplink || !fitsBand(face, 'transmit', uplink)) continue;
-    const both = intersectAll(inSight[1] ?? [], receive);
-    found.push(...windowsOnFace(sight, face, 'transmit', both));
+  const inSight = (direction: Direction): Interval[] =>
+    whereAllHold(sightConditions(day.station, direction), sampled);
+  const [received, transmitted] = [inSight('receive'), inSight('transmit')];
+  let onFace: UsableWindow[] = [];
+  for (const side of sides) {
+    const radio = radioFor(satellite, side.direction);
+    const fits = radio && fitsBand(side.face, side.direction, radio);
+    // Each face has its receive side first: an uplink lies inside the windows of its downlink.
+    if (side.direction === 'receive') onFace = fits ? windowsOnFace(sight, side, received) : [];
+    const windows =
+      side.direction === 'receive'
+        ? onFace
+        : fits
+          ? windowsOnFace(sight, side, intersectAll(transmitted, onFace))
+          : [];
+    found.push(...windows);
   }
   return found;
 }
@@ -106,6 +138,9 @@ export function findWindows(day: DayModel): {
   withinHardEnd: HardEndInterval[];
 } {
   const satellites = new Map(day.satellites.map((satellite) => [satellite.id, satellite]));
+  const sides = day.faces.flatMap((face) =>
+    DIRECTIONS.map((direction) => faceSide(day, face, direction)),
+  );
   const windows: UsableWindow[] = [];
   const withinHardEnd: HardEndInterval[] = [];
   for (const pass of day.passes) {
@@ -113,8 +148,13 @@ export function findWindows(day: DayModel): {
     if (!satellite) continue;
     const limitDb = scanLossLimitDb(day, pass.missionId);
     const sampled = samplePass(pass);
-    const sight = { sampled, satellite, limitDb };
-    windows.push(...windowsOfPass(day, sight));
+    const sight = {
+      sampled,
+      satellite,
+      limitDb,
+      marginFloorDb: marginFloorDb(day, pass.missionId),
+    };
+    windows.push(...windowsOfPass(day, sides, sight));
     withinHardEnd.push(...hardEndOfPass(day, sampled));
   }
   return { windows, withinHardEnd };

@@ -52,7 +52,15 @@ function orbit(random: Random, high: boolean): CircularOrbit {
   };
 }
 
-function satellite(random: Random, index: number, missionId: string): SatelliteModel {
+/** EIRP, dBW, that closes the link to the horizon from low orbit, linear on circular too, and from 20,000 km. */
+const LOW_EIRP_DBW = 4;
+const HIGH_EIRP_DBW = 25;
+
+function satellite(
+  random: Random,
+  index: number,
+  { missionId, high }: { missionId: string; high: boolean },
+): SatelliteModel {
   const polarisation = pick(random, ['rhcp', 'lhcp', 'linear']);
   const slot = Math.floor(random() * 6);
   const radio = { bandwidthKhz: 2000, polarisation, rateKbps: 1000, requiredEbN0Db: 3.5 };
@@ -60,7 +68,11 @@ function satellite(random: Random, index: number, missionId: string): SatelliteM
     id: `s${index}`,
     missionId,
     name: `Object ${index}`,
-    downlink: { ...radio, frequencyMhz: 2205 + 5 * slot, eirpDbw: -1 },
+    downlink: {
+      ...radio,
+      frequencyMhz: 2205 + 5 * slot,
+      eirpDbw: high ? HIGH_EIRP_DBW : LOW_EIRP_DBW,
+    },
     uplink:
       random() < 0.8
         ? { ...radio, bandwidthKhz: 200, frequencyMhz: 2030 + slot, gOverTDbK: -28 }
@@ -165,7 +177,7 @@ export function inventedDay(change: Partial<InventedDayOptions> = {}): DayModel 
     const missionId = `m${index % options.missions}`;
     const high = random() < options.highShare;
     const path = orbit(random, high);
-    satellites.push(satellite(random, index, missionId));
+    satellites.push(satellite(random, index, { missionId, high }));
     for (const [number, pass] of circularPasses(path, station, 5, span).entries())
       passes.push({
         ...pass,
