@@ -1,17 +1,14 @@
 import { useQueries } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import {
-  beamWidths,
-  requiredHpbw,
-  taperOf,
-  type BeamWidths,
-} from '../../../../shared/schedule/facts/separation.ts';
+import { faceAxes, type FaceAxes } from '../../../../shared/array/face-geometry.ts';
+import { requiredHpbw } from '../../../../shared/schedule/facts/separation.ts';
 import { areCoFrequency } from '../../../../shared/schedule/radio-fit.ts';
 import { directionAt, type Track } from '../../../../shared/orbit/track.ts';
 import type { Contact } from '../../../../shared/schemas/plan.ts';
 import { intersect, type Interval } from '../../../../shared/time.ts';
 import { toDegrees } from '../../../../shared/units.ts';
 import { angleBetween, dot } from '../../../../shared/vector.ts';
+import { beamWidths, type BeamWidths } from '../../../charts/beam-outline.ts';
 import { passQueries } from '../../../queries/pass-queries.ts';
 import { legInterval, openContact } from '../model/plan-legs.ts';
 import { usePlanDesk } from './plan-desk.ts';
@@ -29,16 +26,21 @@ export interface Neighbour {
 
 const STEP_MS = 5000;
 
+interface Beam {
+  axes: FaceAxes;
+  half: BeamWidths;
+}
+
 function neighbourOf(
   contact: Contact,
-  { common, beam, own, other }: { common: Interval; beam: BeamWidths; own: Track; other: Track },
+  { common, beam, own, other }: { common: Interval; beam: Beam; own: Track; other: Track },
 ): Neighbour {
   const points: { ms: number; value: number }[] = [];
   let [least, at] = [Infinity, common.fromMs];
   for (let ms = common.fromMs; ms <= common.toMs; ms += STEP_MS) {
     const [a, b] = [directionAt(own, ms), directionAt(other, ms)];
-    const du = (dot(a, beam.axes.u) - dot(b, beam.axes.u)) / beam.widthU;
-    const dv = (dot(a, beam.axes.v) - dot(b, beam.axes.v)) / beam.widthV;
+    const du = (dot(a, beam.axes.u) - dot(b, beam.axes.u)) / (2 * beam.half.u);
+    const dv = (dot(a, beam.axes.v) - dot(b, beam.axes.v)) / (2 * beam.half.v);
     const value = Math.hypot(du, dv);
     points.push({ ms, value });
     if (value < least) [least, at] = [value, ms];
@@ -82,14 +84,14 @@ export function useNeighbours(contact: Contact | null): {
     const own = tracks.list[0];
     if (!face || !radio || !own)
       return { neighbours: [], neededHpbw: null, isPending: tracks.isPending };
-    const beam = beamWidths(face, 'receive', radio.frequencyMhz);
+    const beam = { axes: faceAxes(face), half: beamWidths(face, 'receive', radio.frequencyMhz) };
     const neighbours = others.flatMap(({ other, common }, index) => {
       const track = tracks.list[index + 1];
       return track ? [neighbourOf(other, { common, beam, own, other: track })] : [];
     });
     return {
       neighbours: neighbours.sort((a, b) => a.leastHpbw - b.leastHpbw),
-      neededHpbw: requiredHpbw(taperOf(face, 'receive')),
+      neededHpbw: requiredHpbw(face.receiveTaper),
       isPending: tracks.isPending,
     };
   }, [contact, faces, satellites, others, tracks]);

@@ -67,12 +67,21 @@ export function SheafPanel({ beams, pairs }: Props) {
             pair={pair}
             frequencyMhz={frequencyMhz}
             width={width - 40}
-            height={Math.max(150, Math.min(240, height - size - 112))}
+            height={Math.max(150, Math.min(240, height - Math.max(size, 318) - 100))}
           />
         </>
       )}
     </section>
   );
+}
+
+/** Two satellites of one family are named once: `Osket 7 – 5`. */
+function pairName({ a, b }: BeamPair): string {
+  const [first, second] = [a.contact.satelliteName, b.contact.satelliteName];
+  const family = /^(.*\s)\S+$/.exec(first)?.[1];
+  return family && second.startsWith(family)
+    ? `${first} – ${second.slice(family.length)}`
+    : `${first} – ${second}`;
 }
 
 function ClosestPairs({ pairs }: { pairs: readonly BeamPair[] }) {
@@ -95,8 +104,10 @@ function ClosestPairs({ pairs }: { pairs: readonly BeamPair[] }) {
         <tbody>
           {pairs.slice(0, 4).map((pair, index) => (
             <tr key={`${pair.a.contact.id} ${pair.b.contact.id}`}>
-              <RowHead className={index === 0 ? '' : 'font-normal!'}>
-                {pair.a.contact.satelliteName} – {pair.b.contact.satelliteName}
+              <RowHead
+                className={index === 0 ? 'whitespace-nowrap' : 'font-normal! whitespace-nowrap'}
+              >
+                {pairName(pair)}
               </RowHead>
               <Cell num strong={index === 0}>
                 {decimals(pair.hpbw, 2)}
