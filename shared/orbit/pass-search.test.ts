@@ -141,6 +141,8 @@ describe('any window and mask', () => {
           const mask = elevations.map(
             (deg, index) => [(index * 360) / elevations.length, deg] as const,
           );
+          for (const { aosMs, tcaMs, losMs } of searchPasses({ ...QUERY, elements, mask }).passes)
+            expect(aosMs <= tcaMs && tcaMs <= losMs).toBe(true);
           const seen = seconds(mask);
           expect(seen).toBeLessThanOrEqual(seconds(Math.min(...elevations)) + 0.01);
           expect(seen).toBeGreaterThanOrEqual(seconds(Math.max(...elevations)) - 0.01);

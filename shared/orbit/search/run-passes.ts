@@ -47,6 +47,12 @@ function visibilities(search: Search, run: Run, sides: readonly Side[]): Visibil
 const azimuthDegOf = ({ eastKm, northKm }: Node): number =>
   wrapDegrees(toDegrees(Math.atan2(eastKm, northKm)));
 
+/** The approximation may put a culmination on the wrong side of AOS or LOS by no more than this. */
+const SLACK_MS = 1000;
+
+const isInside = (ms: number, { aos, los }: Visibility, slackMs: number): boolean =>
+  ms > aos.atMs - slackMs && ms < los.atMs + slackMs;
+
 function passOf(
   search: Search,
   run: Run,
@@ -55,8 +61,9 @@ function passOf(
 ): PredictedPass {
   const { aos, los, startsBefore, endsAfter } = visibility;
   const tca = extremes
-    .filter(({ kind, ms }) => kind === 'highest' && ms > aos.atMs && ms < los.atMs)
+    .filter(({ kind, ms }) => kind === 'highest' && isInside(ms, visibility, SLACK_MS))
     .map((extreme) => exactExtreme(search, run, extreme))
+    .filter(({ atMs }) => isInside(atMs, visibility, 0))
     .reduce(higher, higher(aos, los));
   return {
     aosMs: aos.atMs,
