@@ -1,3 +1,4 @@
+import { faceAxes } from '../../array/face-geometry.ts';
 import { intersect, type Interval } from '../../time.ts';
 import { guardMs } from '../holding.ts';
 import { union, widen } from '../intervals.ts';
@@ -8,62 +9,29 @@ import type {
   FaceModel,
   PassModel,
   RadioLinkModel,
-  SatelliteModel,
   UsableWindow,
 } from '../model.ts';
-import { areCoFrequency, radioFor } from '../radio-fit.ts';
-import { whereHolds } from './crossings.ts';
-import {
-  beamWidths,
-  requiredHpbw,
-  separationSquared,
-  taperOf,
-  type BeamWidths,
-} from './separation.ts';
-import { quickSeparation, ticksOf, tickTimes, type TickTrack } from './ticks.ts';
+import { signalOf, signalStateAt } from './beam-signals.ts';
+import { pairConflicts, type FaceSide, type Party } from './pair-conflicts.ts';
+import { beamWidths } from './separation.ts';
+import { beamBounds, ticksOf } from './ticks.ts';
 
-/** One pass as a possible user of a face in a direction. */
-interface Beam {
-  pass: PassModel;
-  radio: RadioLinkModel;
-  /** Where a leg may lie, guard time included, inside the pass. */
+/** A possible user of a face, with where a leg of it may lie, guard time included, inside its pass. */
+interface Beam extends Party {
   spans: Interval[];
-  ticks: TickTrack;
 }
 
-interface FaceBeams {
-  face: FaceModel;
-  direction: Direction;
-  widthsAt: (frequencyMhz: number) => BeamWidths;
+/** Largest Doppler shift of anything in orbit, as a share of the frequency: 8 km/s. */
+const LARGEST_SHIFT = 8 / 299_792;
+
+/** Their bands could overlap once each is shifted. */
+function mightOverlap(a: RadioLinkModel, b: RadioLinkModel): boolean {
+  const apartMhz = Math.abs(a.frequencyMhz - b.frequencyMhz);
+  const shiftMhz = (a.frequencyMhz + b.frequencyMhz) * LARGEST_SHIFT;
+  return apartMhz < (a.bandwidthKhz + b.bandwidthKhz) / 2000 + shiftMhz;
 }
 
-function closePair(setting: FaceBeams, a: Beam, b: Beam, span: Interval): ConflictInterval[] {
-  const { face, direction } = setting;
-  const required = requiredHpbw(taperOf(face, direction));
-  const beam = setting.widthsAt(Math.min(a.radio.frequencyMhz, b.radio.frequencyMhz));
-  if (quickSeparation(beam, a.ticks, b.ticks, span) > required) return [];
-  const squared = separationSquared(beam, a.pass, b.pass);
-  const times = tickTimes(span);
-  const closer = whereHolds((ms) => required ** 2 - squared(ms), times);
-  return closer.map((interval) => {
-    const inside = times.filter((ms) => ms > interval.fromMs && ms < interval.toMs);
-    const instants = [interval.fromMs, ...inside, interval.toMs];
-    const worstAtMs = instants.reduce((worst, ms) => (squared(ms) < squared(worst) ? ms : worst));
-    return {
-      ...interval,
-      faceId: face.id,
-      direction,
-      passIds: [a.pass.id, b.pass.id],
-      worstAtMs,
-      separationHpbw: Math.sqrt(squared(worstAtMs)),
-      requiredHpbw: required,
-      isolationDb: null,
-      requiredDb: null,
-    };
-  });
-}
-
-function conflictsOfBeams(setting: FaceBeams, beams: readonly Beam[]): ConflictInterval[] {
+function conflictsOfBeams(side: FaceSide, beams: readonly Beam[]): ConflictInterval[] {
   const found: ConflictInterval[] = [];
   const entries = beams
     .flatMap((beam) => beam.spans.map((span) => ({ beam, span })))
@@ -72,10 +40,11 @@ function conflictsOfBeams(setting: FaceBeams, beams: readonly Beam[]): ConflictI
   for (const entry of entries) {
     active = active.filter((other) => other.span.toMs > entry.span.fromMs);
     for (const other of active) {
-      if (other.beam.pass.satelliteId === entry.beam.pass.satelliteId) continue;
-      if (!areCoFrequency(other.beam.radio, entry.beam.radio)) continue;
+      const [one, two] = [other.beam.signal, entry.beam.signal];
+      if (one.pass.satelliteId === two.pass.satelliteId) continue;
+      if (!mightOverlap(one.radio, two.radio)) continue;
       const common = intersect(other.span, entry.span);
-      if (common) found.push(...closePair(setting, other.beam, entry.beam, common));
+      if (common) found.push(...pairConflicts(side, [other.beam, entry.beam], common));
     }
     active.push(entry);
   }
@@ -99,29 +68,50 @@ function legSpans(windows: readonly Interval[], pass: PassModel, overhangMs: num
   return wide.flatMap((span) => intersect(span, pass) ?? []);
 }
 
-/** While they last, two co-frequency passes are closer on a face than their beams can be told apart. Exact ends. */
+function faceSide(face: FaceModel, direction: Direction): FaceSide {
+  const boundsAt = new Map<number, ReturnType<typeof beamBounds>>();
+  return {
+    face,
+    direction,
+    axes: faceAxes(face),
+    widthsAt: memoised((mhz: number) => beamWidths(face, direction, mhz)),
+    boundsOf: (signal) => {
+      const known = boundsAt.get(signal.radio.frequencyMhz) ?? beamBounds(signal);
+      boundsAt.set(signal.radio.frequencyMhz, known);
+      return known;
+    },
+  };
+}
+
+/**
+ * While they last, two passes disturb each other on a face more than one of them allows: C/I of each against the other
+ * alone, with fluxes, pattern, floor, overlap and polarisation, falls under its need. Exact ends.
+ */
 export function findConflicts(day: DayModel, windows: readonly UsableWindow[]): ConflictInterval[] {
   const satellites = new Map(day.satellites.map((satellite) => [satellite.id, satellite]));
   const passes = new Map(day.passes.map((pass) => [pass.id, pass]));
-  const ticks = memoised(ticksOf);
-  const beamOf = (direction: Direction, passId: string, own: UsableWindow[]): Beam[] => {
+  const beamOf = (side: FaceSide, passId: string, own: UsableWindow[]): Beam[] => {
+    const { face, direction, axes } = side;
     const pass = passes.get(passId);
-    const satellite: SatelliteModel | undefined = pass && satellites.get(pass.satelliteId);
-    const radio = satellite && radioFor(satellite, direction);
-    if (!pass || !satellite || !radio) return [];
+    const satellite = pass && satellites.get(pass.satelliteId);
+    const signal = pass && satellite && signalOf(face, direction, satellite, pass);
+    if (!signal) return [];
     const overhangMs = direction === 'receive' ? guardMs(day.station, satellite) : 0;
-    return [{ pass, radio, spans: legSpans(own, pass, overhangMs), ticks: ticks(pass) }];
+    const ticks = ticksOf(signal, signalStateAt(axes, direction, signal));
+    return [{ signal, spans: legSpans(own, pass, overhangMs), ticks }];
   };
   return day.faces.flatMap((face) =>
     (['receive', 'transmit'] as const).flatMap((direction) => {
-      const widthsAt = memoised((mhz: number) => beamWidths(face, direction, mhz));
+      const side = faceSide(face, direction);
       const byPass = new Map<string, UsableWindow[]>();
       for (const window of windows) {
         if (window.faceId !== face.id || window.direction !== direction) continue;
         byPass.set(window.passId, [...(byPass.get(window.passId) ?? []), window]);
       }
-      const beams = [...byPass].flatMap(([passId, own]) => beamOf(direction, passId, own));
-      return conflictsOfBeams({ face, direction, widthsAt }, beams);
+      return conflictsOfBeams(
+        side,
+        [...byPass].flatMap(([passId, own]) => beamOf(side, passId, own)),
+      );
     }),
   );
 }

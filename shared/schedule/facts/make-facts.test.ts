@@ -3,9 +3,8 @@ import { inventedDay } from '../../../tests/support/schedule/invented-day.ts';
 import { directionOnFace } from '../../array/face-geometry.ts';
 import { scanLossDb } from '../../array/scan-loss.ts';
 import { lookAnglesAt, directionAt } from '../../orbit/track.ts';
-import { halfPowerBeamwidthU } from '../../array/beamwidth.ts';
+import { taperWeights } from '../../array/taper.ts';
 import type { DayModel, Direction, FaceModel, PassModel } from '../model.ts';
-import { areCoFrequency } from '../radio-fit.ts';
 import { makeFacts } from './make-facts.ts';
 
 /** A day with everything that shapes a window: mask, floors, a sector past north, a loss table, tilted faces. */
@@ -158,58 +157,116 @@ describe('usable windows', () => {
   });
 });
 
+/** Level of a Taylor-weighted line, power ratio, by the plain sum over its elements. */
+function linePower(weights: readonly number[], pitchWl: number, u: number): number {
+  let [re, im, total] = [0, 0, 0];
+  for (const [n, weight] of weights.entries()) {
+    re += weight * Math.cos(2 * Math.PI * n * pitchWl * u);
+    im += weight * Math.sin(2 * Math.PI * n * pitchWl * u);
+    total += weight;
+  }
+  return (re ** 2 + im ** 2) / total ** 2;
+}
+
+/** Receive C/I once more, as powers, for the faces of the invented day: exponent 1.2, floor 38 dB, one frequency. */
+function ratioDb(
+  day: DayModel,
+  face: FaceModel,
+  [wanted, other]: [PassModel, PassModel],
+  ms: number,
+) {
+  const weights = taperWeights(face.receiveTaper, 24);
+  const power = (pass: PassModel): number => {
+    const satellite = day.satellites.find(({ id }) => id === pass.satelliteId);
+    const eirp = 10 ** ((satellite?.downlink.eirpDbw ?? NaN) / 10);
+    return eirp / lookAnglesAt(pass.track, ms).rangeKm ** 2;
+  };
+  const [on, off] = [wanted, other].map(({ track }) =>
+    directionOnFace(face, directionAt(track, ms)),
+  );
+  if (!on || !off) throw new Error('no direction');
+  const pitchWl = 0.068 / (299.792458 / 2245);
+  const pattern =
+    linePower(weights, pitchWl, off.u - on.u) * linePower(weights, pitchWl, off.v - on.v);
+  const carrier = power(wanted) * on.w ** 1.2;
+  return 10 * Math.log10(carrier / (power(other) * off.w ** 1.2 * (pattern + 10 ** -3.8)));
+}
+
 describe('conflicts', () => {
-  it('are the instants at which co-frequency beams are too close, and only those', () => {
-    const day = inventedDay({ seed: 7, satellites: 40, faces: 2, hours: [0, 18] });
-    for (const { downlink } of day.satellites) downlink.frequencyMhz = 2245;
+  it('are the instants at which one of two downlinks has too little C/I, and only those', () => {
+    const day = inventedDay({ seed: 7, satellites: 40, faces: 2, hours: [0, 12] });
+    for (const [index, { downlink }] of day.satellites.entries()) {
+      Object.assign(downlink, { frequencyMhz: 2245, polarisation: 'rhcp' });
+      downlink.eirpDbw = 4 + (index % 4);
+    }
     const { windows, conflicts } = makeFacts(day);
     expect(conflicts.length).toBeGreaterThan(10);
-    const face = day.faces[0];
+    const [face] = day.faces;
     if (!face) throw new Error('no face');
-    const axis = { elements: 24, pitchMm: 68, taper: face.receiveTaper };
-    const width = halfPowerBeamwidthU(axis, 2245);
+    const passes = new Map(day.passes.map((pass) => [pass.id, pass]));
     const received = windows.filter((one) => one.faceId === face.id && one.direction === 'receive');
     const wrong: string[] = [];
     let close = 0;
-    for (const a of received)
-      for (const b of received) {
-        const [passA, passB] = [a, b].map(({ passId }) =>
-          day.passes.find(({ id }) => id === passId),
+    for (const [index, a] of received.entries())
+      for (const b of received.slice(index + 1)) {
+        const [passA, passB] = [passes.get(a.passId), passes.get(b.passId)];
+        if (!passA || !passB || passA.satelliteId === passB.satelliteId) continue;
+        const known = conflicts.filter(
+          ({ passIds, faceId, direction }) =>
+            direction === 'receive' &&
+            faceId === face.id &&
+            passIds.includes(passA.id) &&
+            passIds.includes(passB.id),
         );
-        if (!passA || !passB || passA.satelliteId >= passB.satelliteId) continue;
-        const [one, other] = [passA, passB].map(({ satelliteId }) =>
-          day.satellites.find(({ id }) => id === satelliteId),
-        );
-        if (!one || !other || !areCoFrequency(one.downlink, other.downlink)) continue;
         const fromMs = Math.ceil(Math.max(a.fromMs, b.fromMs) / 1000) * 1000;
         for (let ms = fromMs; ms < Math.min(a.toMs, b.toMs); ms += 1000) {
-          const [onA, onB] = [passA, passB].map(({ track }) =>
-            directionOnFace(face, directionAt(track, ms)),
+          const least = Math.min(
+            ratioDb(day, face, [passA, passB], ms),
+            ratioDb(day, face, [passB, passA], ms),
           );
-          if (!onA || !onB) throw new Error('no direction');
-          const apart = Math.hypot(onA.u - onB.u, onA.v - onB.v) / width;
-          const known = conflicts.some(
-            ({ passIds, faceId, fromMs: from, toMs: to }) =>
-              faceId === face.id &&
-              passIds.includes(passA.id) &&
-              passIds.includes(passB.id) &&
-              from <= ms &&
-              ms < to,
-          );
-          if (apart < 1.25) close++;
-          if (known !== apart < 1.25) wrong.push(`${passA.id} ${passB.id} ${ms} ${apart}`);
+          if (least < 20) close++;
+          // Doppler moves up to 5 % of the other's power out of the band: 0.25 dB.
+          if (Math.abs(least - 20) < 0.25) continue;
+          const inside = known.some((one) => one.fromMs <= ms && ms < one.toMs);
+          if (inside !== least < 20) wrong.push(`${passA.id} ${passB.id} ${ms} ${least}`);
         }
       }
     expect(wrong).toEqual([]);
     expect(close).toBeGreaterThan(30);
+  }, 20_000);
+
+  it('say what the victim has and needs at the worst instant, and who it is', () => {
+    const day = inventedDay({ seed: 7, satellites: 24, faces: 2, hours: [0, 12] });
+    for (const { downlink } of day.satellites)
+      Object.assign(downlink, { frequencyMhz: 2245, polarisation: 'rhcp' });
+    const [loud] = day.satellites;
+    if (!loud) throw new Error('no satellite');
+    loud.requiredCOverIDb = 26;
+    const { conflicts } = makeFacts(day);
+    for (const conflict of conflicts) {
+      const victim = day.passes.find(({ id }) => id === conflict.victimPassId);
+      expect(conflict.passIds).toContain(victim?.id);
+      expect(conflict.requiredDb).toBe(victim?.satelliteId === loud.id ? 26 : 20);
+      expect(conflict.isolationDb ?? NaN).toBeLessThanOrEqual((conflict.requiredDb ?? NaN) + 1e-3);
+      expect(conflict.worstAtMs).toBeGreaterThanOrEqual(conflict.fromMs);
+      expect(conflict.worstAtMs).toBeLessThanOrEqual(conflict.toMs);
+    }
+    expect(conflicts.length).toBeGreaterThan(5);
   });
 
-  it('are none between opposite circular senses or separate bands', () => {
+  it('are fewer between opposite circular senses, and none between separate bands', () => {
     const day = inventedDay({ seed: 7, satellites: 40, faces: 2, hours: [0, 10] });
-    for (const [index, satellite] of day.satellites.entries()) {
-      satellite.downlink.frequencyMhz = 2210 + 3 * (index >> 1);
-      satellite.downlink.polarisation = index % 2 ? 'rhcp' : 'lhcp';
-    }
-    expect(makeFacts(day).conflicts.filter(({ direction }) => direction === 'receive')).toEqual([]);
+    const received = (): number =>
+      makeFacts(day).conflicts.filter(({ direction }) => direction === 'receive').length;
+    for (const { downlink } of day.satellites)
+      Object.assign(downlink, { frequencyMhz: 2245, polarisation: 'rhcp' });
+    const same = received();
+    for (const [index, { downlink }] of day.satellites.entries())
+      downlink.polarisation = index % 2 ? 'rhcp' : 'lhcp';
+    const mixed = received();
+    expect(mixed).toBeLessThan(same);
+    for (const [index, { downlink }] of day.satellites.entries())
+      Object.assign(downlink, { frequencyMhz: 2202 + 2.15 * index, bandwidthKhz: 1900 });
+    expect(received()).toBe(0);
   });
 });

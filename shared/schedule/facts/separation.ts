@@ -1,13 +1,12 @@
 import { halfPowerBeamwidthU } from '../../array/beamwidth.ts';
-import { faceAxes, type FaceAxes } from '../../array/face-geometry.ts';
+import { faceAxes, type FaceAxes, type FaceDirection } from '../../array/face-geometry.ts';
 import type { LineTaper } from '../../array/taper.ts';
-import { directionAt } from '../../orbit/track.ts';
-import { dot } from '../../vector.ts';
-import type { Direction, FaceModel, PassModel } from '../model.ts';
+import type { Direction, FaceModel } from '../model.ts';
 
 /**
- * Least separation in half-power beamwidths of the u-v plane: 1.25 for Taylor tapers at -25 to -30 dB, where the beam
- * has fallen to its design sidelobe; a uniform illumination needs 3 for 20 dB (common practice; reference section 4.9).
+ * Separation in half-power beamwidths of the u-v plane at which a beam has fallen to its design sidelobe: 1.25 for Taylor
+ * tapers at -25 to -30 dB; a uniform illumination needs 3 for 20 dB (common practice; reference section 4.9). For display:
+ * what decides is the interference.
  */
 export const requiredHpbw = (taper: LineTaper): number => (taper.kind === 'taylor' ? 1.25 : 3);
 
@@ -36,16 +35,9 @@ export function beamWidths(
   };
 }
 
-/** Square of the separation of two satellites in half-power beamwidths at an instant. */
-export function separationSquared(
-  beam: BeamWidths,
-  a: PassModel,
-  b: PassModel,
-): (ms: number) => number {
-  return (ms) => {
-    const [toA, toB] = [directionAt(a.track, ms), directionAt(b.track, ms)];
-    const du = (dot(toA, beam.axes.u) - dot(toB, beam.axes.u)) / beam.widthU;
-    const dv = (dot(toA, beam.axes.v) - dot(toB, beam.axes.v)) / beam.widthV;
-    return du * du + dv * dv;
-  };
-}
+/** How far two directions on a face are apart, in half-power beamwidths of the u-v plane. */
+export const separationHpbw = (
+  { widthU, widthV }: Pick<BeamWidths, 'widthU' | 'widthV'>,
+  a: FaceDirection,
+  b: FaceDirection,
+): number => Math.hypot((a.u - b.u) / widthU, (a.v - b.v) / widthV);

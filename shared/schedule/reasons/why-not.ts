@@ -1,11 +1,12 @@
 import { intersect, overlaps, SECOND_MS, type Interval } from '../../time.ts';
 import { blockedIntervals, possibleIntervals, type Blocked } from '../blocked.ts';
+import { closenessWords } from '../conflict-words.ts';
 import { channelLabel, faceLabel, satelliteName, type PlanContext } from '../context.ts';
 import type { ChannelModel, Direction, PassModel, Rule, SatelliteModel } from '../model.ts';
 import { directionWord, type PlanLeg } from '../plan-legs.ts';
 import { closureWords } from '../rules/closure.ts';
 import { servicesOf } from '../services.ts';
-import { clock, clockSpan, decimals, spoken } from '../words.ts';
+import { clock, clockSpan, spoken } from '../words.ts';
 import { freePieces } from './placement.ts';
 
 /** One rule that stops a pass, in a sentence, with the contacts, times and values involved. */
@@ -129,8 +130,15 @@ function otherReasons(context: PlanContext, name: string, ways: readonly Way[]):
           key,
           reason(
             rule,
-            `On ${faceLabel(context, channel.faceId)} ${name} comes too close to ${others[0] ?? 'another'} from ${clockSpan(during)}: ${decimals(conflict.separationHpbw, 2)} half-power beamwidths where ${decimals(conflict.requiredHpbw, 2)} are needed.`,
-            { ...more, value: conflict.separationHpbw, limit: conflict.requiredHpbw, unit: 'HPBW' },
+            `On ${faceLabel(context, channel.faceId)} ${name} comes too close to ${others[0] ?? 'another'} from ${clockSpan(during)}: ${closenessWords(conflict)}.`,
+            conflict.isolationDb === null
+              ? {
+                  ...more,
+                  value: conflict.separationHpbw,
+                  limit: conflict.requiredHpbw,
+                  unit: 'HPBW',
+                }
+              : { ...more, value: conflict.isolationDb, limit: conflict.requiredDb, unit: 'dB' },
           ),
         );
       else if (closure) say(key, reason(rule, `${closureWords(context, closure)}.`, more));

@@ -1,8 +1,9 @@
 import { intersect, type Interval } from '../../time.ts';
 import { faceLabel, satelliteName, type PlanContext } from '../context.ts';
+import { closenessWords } from '../conflict-words.ts';
 import type { ConflictInterval, Violation } from '../model.ts';
 import { directionWord, groupBy, overlappingPairs, type PlanLeg } from '../plan-legs.ts';
-import { clockSpan, decimals } from '../words.ts';
+import { clockSpan } from '../words.ts';
 
 function violation(
   context: PlanContext,
@@ -12,14 +13,11 @@ function violation(
 ): Violation {
   const [one, other] = pair.map(({ contact }) => satelliteName(context, contact.satelliteId));
   const isolation = conflict.isolationDb !== null && conflict.requiredDb !== null;
-  const words = isolation
-    ? `only ${decimals(conflict.isolationDb ?? 0, 1)} dB of isolation where ${decimals(conflict.requiredDb ?? 0, 1)} dB are needed`
-    : `${decimals(conflict.separationHpbw, 2)} half-power beamwidths where ${decimals(conflict.requiredHpbw, 2)} are needed`;
   return {
     rule: 'beams-too-close',
     message:
       `The ${directionWord(conflict.direction)} beams of ${one} and ${other} on ${faceLabel(context, conflict.faceId)} ` +
-      `come too close from ${clockSpan(during)}: ${words}.`,
+      `come too close from ${clockSpan(during)}: ${closenessWords(conflict)}.`,
     contactIds: pair.map(({ contact }) => contact.id),
     ...during,
     value: isolation ? conflict.isolationDb : conflict.separationHpbw,
@@ -42,7 +40,7 @@ function judgePair(context: PlanContext, pair: [PlanLeg, PlanLeg]): Violation[] 
     });
 }
 
-/** Co-frequency beams of a face and direction stay apart at each moment. */
+/** Each beam of a face and direction keeps the C/I it needs against every other one, at each moment. */
 export const judgeBeamsTooClose = (context: PlanContext, legs: readonly PlanLeg[]): Violation[] =>
   groupBy(legs, ({ contact, direction }) => `${contact.faceId}|${direction}`)
     .flatMap((together) => overlappingPairs(together, ({ leg }) => leg))

@@ -12,6 +12,8 @@ export interface CircularOrbit {
 const EARTH_KM = 6371;
 const MU = 398600.4418;
 const EARTH_RATE_RAD_S = 7.2921159e-5;
+/** Phases and nodes are given for here; days before it are as good as days after it. */
+const EPOCH_MS = 20_780 * 86_400_000;
 
 /** East, north, up, km, seen from a station on the sphere. */
 function horizonKm(
@@ -21,7 +23,7 @@ function horizonKm(
   ms: number,
 ): [number, number, number] {
   const radius = EARTH_KM + orbit.altitudeKm;
-  const seconds = (ms % 864e6) / 1000;
+  const seconds = (ms - EPOCH_MS) / 1000;
   const u = toRadians(orbit.phaseDeg) + Math.sqrt(MU / radius ** 3) * seconds;
   const i = toRadians(orbit.inclinationDeg);
   const node = toRadians(orbit.nodeDeg) - EARTH_RATE_RAD_S * seconds - toRadians(longitudeDeg);
