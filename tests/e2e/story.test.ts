@@ -25,7 +25,10 @@ const freshFile = (epochMs: number): Buffer =>
   );
 
 const press = (page: Page, name: string | RegExp) =>
-  page.getByRole('button', { name, exact: typeof name === 'string' }).click();
+  page
+    .getByRole('button', { name, exact: typeof name === 'string' })
+    .first()
+    .click();
 const inDialog = (page: Page, name: string) =>
   page.getByRole('dialog').getByRole('button', { name, exact: true }).click();
 const dialogGone = (page: Page) => page.getByRole('dialog').waitFor({ state: 'hidden' });
@@ -76,8 +79,9 @@ describe.each(['2026-12-01T10:20:00.000Z', '2026-12-01T23:50:00.000Z'])('at %s',
       if ((await accept.count()) > 0) await accept.check();
       if (decision === 'Return with a reason')
         await page.getByLabel('Comment').fill('One more contact before noon');
+      const answer = page.waitForResponse((one) => one.url().endsWith('/sign-offs'));
       await button.click();
-      await button.waitFor({ state: 'detached' });
+      expect((await answer).status()).toBe(200);
       answers += 1;
       if (decision === 'Return with a reason') return answers;
     }
