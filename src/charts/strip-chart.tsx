@@ -30,7 +30,7 @@ interface Props extends Interval {
 }
 
 const LEFT = 30;
-const RIGHT = 62;
+const RIGHT = 68;
 const TOP = 17;
 
 /** One quantity over one pass; several stand under each other on one time axis. */

@@ -45,7 +45,7 @@ export function AnnouncerProvider({ children }: { children: ReactNode }) {
   return (
     <AnnounceContext value={announce}>
       {children}
-      <div className="pointer-events-none fixed right-5 bottom-5 z-60 flex w-90 max-w-[calc(100vw-2.5rem)] flex-col gap-2">
+      <div className="pointer-events-none fixed bottom-4 left-1/2 z-60 flex w-100 max-w-[calc(100vw-2.5rem)] -translate-x-1/2 flex-col gap-2">
         <div role="status" aria-live="polite" className="contents">
           {list}
         </div>

@@ -1,12 +1,13 @@
 import { useQueryClient, type QueryClient, type QueryKey } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { z } from 'zod';
+import { refreshPlans } from '../queries/plan-queries.ts';
 
 const Thin = z.looseObject({ topic: z.string(), id: z.string().optional() });
 
 /** What a topic of the stream makes worth reading again; the reading itself keeps the access rules. */
 const KEYS: Record<string, QueryKey[]> = {
-  plan: [['plans']],
+  plan: [],
   run: [],
   elements: [['element-sets'], ['satellites'], ['passes'], ['plans']],
   passes: [['passes'], ['plans']],
@@ -36,8 +37,11 @@ const whenCalm = (client: QueryClient, start: () => void): (() => void) => {
 const gatherer = (client: QueryClient) => {
   const waiting = new Map<string, QueryKey>();
   let timer = 0;
+  let plansChanged = false;
   const flush = (): void => {
     timer = 0;
+    if (plansChanged) void refreshPlans(client);
+    plansChanged = false;
     for (const queryKey of waiting.values()) void client.invalidateQueries({ queryKey });
     waiting.clear();
   };
@@ -46,6 +50,7 @@ const gatherer = (client: QueryClient) => {
       const event = Thin.safeParse(readJson(data));
       if (!event.success) return;
       const { topic, id } = event.data;
+      if (topic === 'plan') plansChanged = true;
       const keys = topic === 'run' && id ? [['runs', id]] : (KEYS[topic] ?? []);
       for (const key of keys) waiting.set(key.join(), key);
       if (timer === 0) timer = window.setTimeout(flush, GATHER_MS);

@@ -1,4 +1,10 @@
-import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import {
+  keepPreviousData,
+  queryOptions,
+  useMutation,
+  useQueryClient,
+  type QueryClient,
+} from '@tanstack/react-query';
 import type { z } from 'zod';
 import {
   EditResult,
@@ -83,12 +89,21 @@ export const planQueries = {
     }),
 };
 
+/** Answers that belong to one version of a plan: a new version asks for them by itself, so they are not read twice. */
+const OF_ONE_VERSION = new Set<unknown>(['open-passes', 'facts', 'judge']);
+
+/** Plans are read again; what is costly and keyed by version is left to the version. */
+export const refreshPlans = (client: QueryClient): Promise<void> =>
+  client.invalidateQueries({
+    predicate: ({ queryKey }) => queryKey[0] === 'plans' && !OF_ONE_VERSION.has(queryKey[2]),
+  });
+
 /** A change of plans; whatever comes of it, plans are read again. */
 function usePlanChange<Body, Answer>(change: (body: Body) => Promise<Answer>) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: change,
-    onSettled: () => client.invalidateQueries({ queryKey: planQueries.all }),
+    onSettled: () => refreshPlans(client),
   });
 }
 
@@ -98,10 +113,32 @@ const post = <T extends z.ZodType>(plan: Tagged, act: string, answer: T, body: u
 export const useCreatePlan = () =>
   usePlanChange((body: CreatePlan) => callApi('/api/plans', Plan, { method: 'POST', body }));
 
-export const useEditPlan = () =>
-  usePlanChange(({ plan, edits }: { plan: Tagged; edits: Edit[] }) =>
-    post(plan, 'edits', EditResult, { edits }),
-  );
+/** Edits show at once, from their own answer; scores and results follow when the plan is read again. */
+export function useEditPlan() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: ({ plan, edits }: { plan: Tagged; edits: Edit[] }) =>
+      post(plan, 'edits', EditResult, { edits }),
+    onSuccess: (result, { plan }) =>
+      client.setQueryData(planQueries.one(plan.id).queryKey, (known) =>
+        known ? withEdits(known, result) : known,
+      ),
+    onSettled: () => refreshPlans(client),
+  });
+}
+
+/** A plan with the contacts that an edit has changed, added or taken off. */
+export function withEdits(plan: Plan, { version, contacts, removedIds }: EditResult): Plan {
+  const changed = new Map(contacts.map((contact) => [contact.id, contact]));
+  const gone = new Set(removedIds);
+  const kept = plan.contacts
+    .filter(({ id }) => !gone.has(id))
+    .map((contact) => changed.get(contact.id) ?? contact);
+  const known = new Set(plan.contacts.map(({ id }) => id));
+  const added = contacts.filter(({ id }) => !known.has(id) && !gone.has(id));
+  return { ...plan, version, contacts: [...kept, ...added] };
+}
+
 /** Judges edits without making them; the answer lists every broken rule. */
 export const judgeEdits = (plan: Tagged, edits: Edit[], signal: AbortSignal) =>
   callApi(`/api/plans/${plan.id}/edits`, EditResult, {

@@ -26,7 +26,8 @@ export function AssignmentOutcome({ runId }: { runId: string }) {
         {assigned !== undefined && (
           <strong className="font-semibold">{counted(assigned, 'contact')}</strong>
         )}
-        {open !== undefined && `, ${counted(open, 'pass', 'passes')} left open`}: {nearness}.
+        {open !== undefined && `, ${counted(open, 'pass', 'passes')} left open`}:{' '}
+        {nearness.replace(/\.$/, '')}.
       </p>
       {applied === false && (
         <>

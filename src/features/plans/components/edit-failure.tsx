@@ -3,7 +3,7 @@ import { Button } from '../../../components/button.tsx';
 import { Dialog } from '../../../components/dialog.tsx';
 import { ErrorNote } from '../../../components/states.tsx';
 import { ApiError, isStale } from '../../../lib/api-error.ts';
-import { planQueries } from '../../../queries/plan-queries.ts';
+import { refreshPlans } from '../../../queries/plan-queries.ts';
 import { ViolationList } from './violation-list.tsx';
 
 /** Why an edit was not made: the rules it breaks, or that somebody was faster. */
@@ -27,7 +27,7 @@ export function EditFailure({ error, onClose }: { error: Error | null; onClose: 
             <Button
               variant="primary"
               onClick={() => {
-                void client.invalidateQueries({ queryKey: planQueries.all });
+                void refreshPlans(client);
                 onClose();
               }}
             >

@@ -4,7 +4,7 @@ import { Button, IconButton } from '../../../components/button.tsx';
 import { Icon, type IconName } from '../../../components/icon.tsx';
 import { RunProgress } from '../../../components/run-progress.tsx';
 import { dateClock } from '../../../lib/format-time.ts';
-import { planQueries } from '../../../queries/plan-queries.ts';
+import { refreshPlans } from '../../../queries/plan-queries.ts';
 import { usePlanDesk } from '../hooks/plan-desk.ts';
 import { usePlanEdits } from '../hooks/plan-edits.ts';
 import { AssignmentOutcome } from './assignment-outcome.tsx';
@@ -50,10 +50,7 @@ function RunNotice() {
   return (
     <div className="flex items-center gap-4 border-b border-line bg-surface px-5 py-2">
       <div className="max-w-160 min-w-0 flex-1">
-        <RunProgress
-          runId={runId}
-          onOver={() => void client.invalidateQueries({ queryKey: planQueries.all })}
-        />
+        <RunProgress runId={runId} onOver={() => void refreshPlans(client)} />
         <AssignmentOutcome runId={runId} />
       </div>
       <Button size="small" onClick={() => open({ kind: 'assignment' })}>

@@ -50,7 +50,7 @@ describe('columns of the calendar', () => {
   });
 
   it('folds neighbours that hold nothing into one rail when it becomes narrow', () => {
-    const { items } = ask([receive, transmit], 330, ['R1', 'R4', 'T1']);
+    const { items } = ask([receive, transmit], 290, ['R1', 'R4', 'T1']);
     expect(items.map(({ label, kind }) => `${label} ${kind}`)).toEqual([
       'R1 column',
       '2–3 rail',

@@ -28,7 +28,7 @@ export interface CalendarLayout {
 
 const RAIL = 26;
 const GROUP_GAP = 14;
-const LEAST = { receive: 84, transmit: 62 };
+const LEAST = { receive: 72, transmit: 54 };
 const SHARE = { receive: 1, transmit: 0.74 };
 
 interface Question {

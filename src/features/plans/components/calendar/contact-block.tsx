@@ -32,12 +32,14 @@ export const ContactBlock = memo(function ContactBlock({ leg }: Props) {
   const log = logs.get(leg.contactId);
   const drifted = open?.driftSeconds ?? null;
   const dragged = frame.drag?.leg.id === leg.id;
+  const words = wordsOf(leg, labelOf);
   return (
     <button
       type="button"
       data-leg={leg.id}
       aria-pressed={selected}
-      aria-label={wordsOf(leg, labelOf)}
+      aria-label={words}
+      title={height < 34 ? words : undefined}
       tabIndex={frame.tabLegId === leg.id ? 0 : -1}
       onClick={() => selectContact(selected ? null : leg.contactId)}
       onPointerDown={(event) => frame.beginDrag(event, leg.id)}
@@ -90,7 +92,7 @@ export const ContactBlock = memo(function ContactBlock({ leg }: Props) {
           partner={labelOf(leg.partnerChannelId)}
           drifted={drifted !== null}
         />
-        {drifted !== null && height >= 22 && (
+        {drifted !== null && height >= 36 && (
           <span className="figures absolute inset-x-0 bottom-0 flex h-[17px] items-center gap-1 bg-warn-soft pl-2.5 font-semibold text-warn-text">
             <Icon name="drifted" size={12} />
             {signed(drifted, 1)} s
@@ -99,7 +101,7 @@ export const ContactBlock = memo(function ContactBlock({ leg }: Props) {
         <Corner
           open={open}
           served={log?.outcome ?? null}
-          raised={drifted !== null}
+          drifted={drifted !== null}
           height={height}
         />
       </span>
@@ -134,7 +136,9 @@ function BlockWords({
   return (
     <span className="figures absolute inset-x-0 top-1 block pr-1 pl-2.5 leading-[14px]">
       {name}
-      {height >= 34 && <span className="block truncate text-ink-muted">{shortSpan(leg)}</span>}
+      {height >= (drifted ? 52 : 34) && (
+        <span className="block truncate text-ink-muted">{shortSpan(leg)}</span>
+      )}
       {height >= (drifted ? 64 : 48) && open && (
         <span className="block truncate text-ink-muted">max {degrees(open.maxElevationDeg)}</span>
       )}
@@ -146,21 +150,23 @@ function BlockWords({
 function Corner({
   open,
   served,
-  raised,
+  drifted,
   height,
 }: {
   open: Contact | null;
   served: string | null;
-  raised: boolean;
+  drifted: boolean;
   height: number;
 }) {
-  if (height < 18) return null;
+  if (height < 16) return null;
+  const raised = drifted && height >= 36;
   const look = served === 'served' ? 'approve' : served === 'partly' ? 'partly' : 'struck';
   return (
     <span
       className="absolute right-1 flex items-center gap-1 text-ink-muted"
       style={{ bottom: raised ? 19 : 3 }}
     >
+      {drifted && !raised && <Icon name="drifted" size={12} className="text-warn-mark" />}
       {open?.emergency && <Icon name="needsAttention" size={12} className="text-danger-mark" />}
       {open?.locked && <Icon name="lock" size={12} />}
       {served && (

@@ -16,7 +16,8 @@ import { CalendarFrameContext, GUTTER, type CalendarFrame } from './calendar-fra
 import { CalendarHead } from './calendar-head.tsx';
 import { useCalendarKeys } from './use-calendar-keys.ts';
 
-const LEAST_PX_PER_MINUTE = 2;
+/** A contact of five minutes keeps its name. */
+const LEAST_PX_PER_MINUTE = 3.2;
 const HEAD_AND_FOOT = 48 + 30;
 const MARGIN = 14;
 

@@ -6,7 +6,7 @@ import { SelectField } from '../../../../components/field.tsx';
 import { RunProgress } from '../../../../components/run-progress.tsx';
 import { ErrorNote } from '../../../../components/states.tsx';
 import { counted } from '../../../../lib/format-number.ts';
-import { planQueries, useStartAssignment } from '../../../../queries/plan-queries.ts';
+import { refreshPlans, useStartAssignment } from '../../../../queries/plan-queries.ts';
 import { usePlanDesk } from '../../hooks/plan-desk.ts';
 import { usePlanEdits } from '../../hooks/plan-edits.ts';
 import { AssignmentOutcome } from '../assignment-outcome.tsx';
@@ -56,7 +56,9 @@ export function AssignmentDialog({ onClose }: { onClose: () => void }) {
           title="Plan anew"
         >
           The best plan by the missions’ requirements;{' '}
-          {locked > 0 ? `${counted(locked, 'locked contact')} stay.` : 'locked contacts stay.'}
+          {locked > 0
+            ? `${counted(locked, 'locked contact stays', 'locked contacts stay')}.`
+            : 'locked contacts stay.'}
         </Choice>
         <Choice
           name="mode"
@@ -88,7 +90,7 @@ export function AssignmentDialog({ onClose }: { onClose: () => void }) {
               runId={runId}
               onOver={() => {
                 setOver(true);
-                void client.invalidateQueries({ queryKey: planQueries.all });
+                void refreshPlans(client);
               }}
             />
             <AssignmentOutcome runId={runId} />
