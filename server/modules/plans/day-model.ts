@@ -132,6 +132,7 @@ const passModel = ({ pass, prediction, satellite }: PassInForce): PassModel => (
   tcaMs: prediction.tcaMs,
   maxElevationDeg: prediction.maxElevationDeg,
   track: prediction.track,
+  elementEpochMs: prediction.elementSet.epochMs,
 });
 
 const STATE_RANK = { released: 0, approved: 1, 'in-review': 2, draft: 3, superseded: 4 } as const;

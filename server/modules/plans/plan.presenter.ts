@@ -61,7 +61,6 @@ export const presentContact = (world: World, row: PlannedContact, person: Person
     locked: model.locked,
     emergency: row.contact.emergency,
     ...contactFigures(world, model),
-    minMarginDb: null,
     elementSetId: source?.elementSetId ?? row.prediction.elementSet.id,
     driftSeconds: driftSeconds(world, row),
     note: row.note,
