@@ -8,6 +8,7 @@ import { QueryView } from '../../components/query-view.tsx';
 import { ErrorState } from '../../components/states.tsx';
 import { ChannelPanel } from '../../features/stations/components/channel-panel.tsx';
 import { ClosurePanel } from '../../features/stations/components/closure-panel.tsx';
+import { FaceFiguresPanel } from '../../features/stations/components/face-figures-panel.tsx';
 import { FacePanel } from '../../features/stations/components/face-panel.tsx';
 import { InhibitBar } from '../../components/inhibit-bar.tsx';
 import { StationDialog } from '../../features/stations/components/station-dialog.tsx';
@@ -63,6 +64,7 @@ export function Component() {
                   <div className="flex min-w-0 flex-col gap-3.5">
                     <StationFacts station={station} />
                     <FacePanel station={station} />
+                    <FaceFiguresPanel station={station} />
                     <ChannelPanel station={station} />
                     <ClosurePanel station={station} />
                   </div>
