@@ -25,6 +25,8 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
+          // One group after the other: browser tests have the machine to themselves.
+          sequence: { groupOrder: 0 },
           include: ['{shared,server,src}/**/*.test.{ts,tsx}', 'tests/architecture/**/*.test.ts'],
           setupFiles: ['tests/support/fail-on-console.ts'],
         },
@@ -33,6 +35,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'accuracy',
+          sequence: { groupOrder: 1 },
           include: ['tests/accuracy/**/*.test.ts'],
           testTimeout: 120_000,
           setupFiles: ['tests/support/fail-on-console.ts'],
@@ -42,6 +45,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'api',
+          sequence: { groupOrder: 2 },
           include: ['tests/api/**/*.test.ts'],
           pool: 'forks',
           maxWorkers: 2,
@@ -54,6 +58,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'e2e',
+          sequence: { groupOrder: 3 },
           include: ['tests/e2e/**/*.test.ts'],
           fileParallelism: false,
           testTimeout: 180_000,
