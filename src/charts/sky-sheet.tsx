@@ -26,6 +26,8 @@ interface Props {
   /** This track stays at full weight, the others step back. */
   followed?: string | null;
   label: string;
+  /** It holds things to act on: then it is a group, not one picture. */
+  interactive?: boolean;
   /** Beams, names, hairlines: in the sheet's own coordinates, above the tracks. */
   children?: ReactNode;
 }
@@ -39,6 +41,7 @@ export function SkySheet({
   instantMs = null,
   followed = null,
   label,
+  interactive = false,
   children,
 }: Props) {
   const id = useId();
@@ -51,7 +54,7 @@ export function SkySheet({
       width={width}
       height={height}
       viewBox={`${-width / 2} ${-height / 2} ${width} ${height}`}
-      role="img"
+      role={interactive ? 'group' : 'img'}
       aria-label={label}
       className="max-w-full select-none"
     >

@@ -11,6 +11,7 @@ import { seriesColor } from '../../../lib/series.ts';
 import { usePlanDesk } from '../hooks/plan-desk.ts';
 import { usePlanEdits } from '../hooks/plan-edits.ts';
 import { usePlanView } from '../hooks/plan-view.ts';
+import { PASS_DRAG_TYPE } from '../model/pass-drag.ts';
 import { lookOfPass, toneOfPass } from '../model/reasons.ts';
 
 const FIRST = 6;
@@ -108,15 +109,18 @@ function Group({ title, passes, action, folded }: GroupProps) {
 }
 
 function OpenPassRow({ pass }: { pass: OpenPass }) {
-  const { missions, passes, ground } = usePlanDesk();
+  const { missions, passes, ground, allows } = usePlanDesk();
   const { passId, showPass, selectPass } = usePlanView();
   const series = missions.series(pass.missionId);
   const interval = { fromMs: Date.parse(pass.aosUtc), toMs: Date.parse(pass.losUtc) };
   const chosen = pass.passId === passId;
   const { icon, word } = lookOfPass(pass);
   const known = passes.get(pass.passId);
+  const draggable = allows('edit') && pass.standing !== 'unusable';
   return (
     <li
+      draggable={draggable}
+      onDragStart={(event) => event.dataTransfer.setData(PASS_DRAG_TYPE, pass.passId)}
       className={classNames(
         'relative border-t border-line-soft',
         chosen ? 'bg-accent-soft' : 'hover:bg-surface',

@@ -1,6 +1,7 @@
 import type { Channel, Closure } from '../../../../shared/schemas/channel.ts';
 import type { Face } from '../../../../shared/schemas/face.ts';
-import { DAY_MS, intersect, type Interval } from '../../../../shared/time.ts';
+import type { Interval } from '../../../../shared/time.ts';
+import { closedSpans, type ClosedSpan } from '../../../lib/closures.ts';
 import { polarisationWord } from '../../../lib/polarisation.ts';
 
 /** One beam channel as a column of the plan, with what closes it on the day. */
@@ -10,42 +11,12 @@ export interface PlanColumn {
   face: Face;
   closed: ClosedSpan[];
 }
-export interface ClosedSpan extends Interval {
-  id: string;
-  reason: string;
-  untilFurtherNotice: boolean;
-}
 /** Columns of one direction and sense stand together under one head. */
 export interface ColumnGroup {
   key: string;
   title: string;
   direction: 'receive' | 'transmit';
   columns: PlanColumn[];
-}
-
-const concerns = (closure: Closure, channel: Channel, face: Face): boolean =>
-  closure.scope === 'station' ||
-  (closure.scope === 'face' && closure.scopeId === face.id) ||
-  (closure.scope === 'channel' && closure.scopeId === channel.id);
-
-/** What closes a channel for its direction in a span; losses that merely reduce are not closures. */
-function closedSpans(
-  { channel, face }: { channel: Channel; face: Face },
-  closures: readonly Closure[],
-  span: Interval,
-): ClosedSpan[] {
-  return closures.flatMap((closure): ClosedSpan[] => {
-    if (closure.reducedByDb !== null || !concerns(closure, channel, face)) return [];
-    if (closure.direction !== 'both' && closure.direction !== channel.direction) return [];
-    const end = closure.endedUtc ?? closure.toUtc;
-    const common = intersect(span, {
-      fromMs: Date.parse(closure.fromUtc),
-      toMs: end === null ? span.toMs + DAY_MS : Date.parse(end),
-    });
-    return common
-      ? [{ ...common, id: closure.id, reason: closure.reason, untilFurtherNotice: end === null }]
-      : [];
-  });
 }
 
 const byLabel = (a: { channel: Channel }, b: { channel: Channel }): number =>
@@ -94,7 +65,7 @@ export function columnGroups(
       id: channel.id,
       channel,
       face,
-      closed: closedSpans({ channel, face }, closures, span),
+      closed: closedSpans(channel, closures, span),
     });
   }
   return [...groups.values()];

@@ -1,3 +1,4 @@
+import { useMemo, useState } from 'react';
 import { isHidden, type Contact, type Plan } from '../../../../shared/schemas/plan.ts';
 import { Panel } from '../../../components/panel.tsx';
 import { useMissions } from '../../../hooks/use-missions.ts';
@@ -5,6 +6,7 @@ import { counted } from '../../../lib/format-number.ts';
 import { AskedTable } from './asked-table.tsx';
 import { ChangesPanel } from './changes-panel.tsx';
 import { Decision } from './decision.tsx';
+import { DaySky } from './day-sky.tsx';
 import { DayStrip } from './day-strip.tsx';
 import { OwnContacts } from './own-contacts.tsx';
 
@@ -16,9 +18,14 @@ interface Props {
 /** What a mission asked against what the plan gives, its contacts, and the decision; two minutes' reading. */
 export function SignOffSheet({ plan, missionId }: Props) {
   const missions = useMissions();
+  const [followed, setFollowed] = useState<string | null>(null);
   const results = plan.requirements.filter((one) => one.missionId === missionId);
-  const contacts = plan.contacts.flatMap((one): Contact[] =>
-    !isHidden(one) && one.missionId === missionId ? [one] : [],
+  const contacts = useMemo(
+    () =>
+      plan.contacts.flatMap((one): Contact[] =>
+        !isHidden(one) && one.missionId === missionId ? [one] : [],
+      ),
+    [plan.contacts, missionId],
   );
   const short = results.filter((one) => !one.met).length;
   return (
@@ -33,12 +40,18 @@ export function SignOffSheet({ plan, missionId }: Props) {
         </Panel>
         <Panel title={counted(contacts.length, 'contact')} flush>
           <DayStrip day={plan.day} contacts={contacts} series={missions.series(missionId)} />
-          <OwnContacts contacts={contacts} stationId={plan.stationId} />
+          <OwnContacts
+            contacts={contacts}
+            stationId={plan.stationId}
+            day={plan.day}
+            onFollow={setFollowed}
+          />
         </Panel>
       </div>
       <div className="flex min-w-0 flex-col gap-3.5">
         <ChangesPanel plan={plan} missionId={missionId} />
         <Decision plan={plan} missionId={missionId} shortCount={short} />
+        <DaySky plan={plan} contacts={contacts} followedId={followed} />
       </div>
     </div>
   );

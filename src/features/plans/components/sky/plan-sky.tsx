@@ -106,6 +106,7 @@ function Sheet({ sky, pairs, width, height }: SheetProps) {
       margin={margin}
       tracks={sky.tracks}
       instantMs={instantMs}
+      interactive
       followed={followed ?? selected}
       label={`The sky at ${clockSeconds(instantMs)} UTC: ${counted(sky.beams.length, 'beam')} up${sky.beams.length > 0 ? `, ${sky.beams.map(({ contact }) => contact.satelliteName).join(', ')}` : ''}`}
     >

@@ -54,6 +54,16 @@ export function SkyNames({ beams, radius, reach, onSelect, onFollow }: Props) {
         return (
           <g
             key={contact.id}
+            role="button"
+            tabIndex={0}
+            aria-label={`${contact.satelliteName} on ${labelOf(contact.receive.channelId)}, azimuth ${azimuth(look.azimuthDeg)}, elevation ${decimals(look.elevationDeg, 1)} deg, scan loss ${decimals(lossDb, 1)} dB`}
+            onKeyDown={(event) => {
+              if (event.key !== 'Enter' && event.key !== ' ') return;
+              event.preventDefault();
+              onSelect(contact.id);
+            }}
+            onFocus={() => onFollow(contact.passId)}
+            onBlur={() => onFollow(null)}
             onClick={() => onSelect(contact.id)}
             onPointerEnter={() => onFollow(contact.passId)}
             onPointerLeave={() => onFollow(null)}
