@@ -74,4 +74,4 @@ export class Person {
 
 /** Chromium prints every answer of 4xx; those that a story provokes are no faults of the page. */
 const isExpected = (text: string): boolean =>
-  /Failed to load resource: the server responded with a status of (401|409|412|422)/.test(text);
+  /Failed to load resource: the server responded with a status of (401|403|409|412|422)/.test(text);
