@@ -29,7 +29,7 @@ export function DayStrip({ day, contacts, series }: Props) {
           <g key={hour}>
             <path d={`M${x(fromMs + hour * HOUR_MS)} 0v${HEIGHT}`} stroke="var(--line)" />
             <text
-              x={Math.min(WIDTH - 14, Math.max(14, x(fromMs + hour * HOUR_MS)))}
+              x={Math.min(WIDTH - 18, Math.max(18, x(fromMs + hour * HOUR_MS)))}
               y={HEIGHT + 14}
               textAnchor="middle"
               fontSize="12"

@@ -14,14 +14,14 @@ import { legInterval } from '../../model/plan-legs.ts';
 import { ContactActions } from './contact-actions.tsx';
 import { ContactHistory } from './contact-history.tsx';
 import { INSPECTOR_CHART_WIDTH } from './inspector-width.ts';
-import { NeighbourTable, SeparationChart } from './neighbours.tsx';
+import { IsolationChart, NeighbourTable } from './neighbours.tsx';
 import { PassInstants } from './pass-instants.tsx';
 
 /** Everything about one contact; its actions stay in reach at the foot. */
 export function ContactInspector({ contact }: { contact: Contact }) {
   const { missions, station, plan, passes } = usePlanDesk();
   const { selectContact, instantMs, view } = usePlanView();
-  const { neighbours, neededHpbw } = useNeighbours(contact);
+  const neighbours = useNeighbours(contact);
   const series = missions.series(contact.missionId);
   const color = series === null ? 'var(--ink-muted)' : seriesColor(series);
   const pass = passes.get(contact.passId);
@@ -76,16 +76,10 @@ export function ContactInspector({ contact }: { contact: Contact }) {
           instantMs={view === 'sky' || view === 'map' ? instantMs : null}
           width={INSPECTOR_CHART_WIDTH}
         />
-        {neighbours.length > 0 && neededHpbw !== null && (
+        {neighbours.length > 0 && (
           <>
-            <SeparationChart
-              neighbours={neighbours}
-              neededHpbw={neededHpbw}
-              fromMs={fromMs}
-              toMs={toMs}
-              used={used}
-            />
-            <NeighbourTable neighbours={neighbours} neededHpbw={neededHpbw} />
+            <IsolationChart neighbours={neighbours} fromMs={fromMs} toMs={toMs} used={used} />
+            <NeighbourTable neighbours={neighbours} />
           </>
         )}
         <ContactWarnings contact={contact} />

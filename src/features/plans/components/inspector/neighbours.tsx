@@ -12,23 +12,21 @@ import { INSPECTOR_CHART_WIDTH } from './inspector-width.ts';
 
 interface ChartProps extends Interval {
   neighbours: readonly Neighbour[];
-  neededHpbw: number;
   used: Interval;
 }
 
-/** Separation to the nearest beam, against what the rule needs. */
-export function SeparationChart({ neighbours, neededHpbw, fromMs, toMs, used }: ChartProps) {
-  const nearest = neighbours[0];
-  if (!nearest) return null;
-  const top = Math.max(4, Math.ceil(neededHpbw * 3));
+/** Isolation against the tightest beam beside it, and what is needed. */
+export function IsolationChart({ neighbours, fromMs, toMs, used }: ChartProps) {
+  const tightest = neighbours[0];
+  if (!tightest) return null;
   return (
     <StripChart
-      title={`To ${nearest.contact.satelliteName}`}
-      unit="beamwidths"
-      points={nearest.points}
-      domain={[0, top]}
-      limit={{ value: neededHpbw, words: `needs ${neededHpbw}` }}
-      best={`least ${decimals(nearest.leastHpbw, 2)}`}
+      title="Isolation"
+      unit={`dB to ${tightest.contact.satelliteName}`}
+      points={tightest.points}
+      domain={[0, 45]}
+      limit={{ value: tightest.neededDb, words: `needs ${decimals(tightest.neededDb, 1)}` }}
+      best={`least ${decimals(tightest.leastDb, 1)}`}
       color="var(--ink)"
       within={[used]}
       fromMs={fromMs}
@@ -42,13 +40,7 @@ export function SeparationChart({ neighbours, neededHpbw, fromMs, toMs, used }: 
   );
 }
 
-export function NeighbourTable({
-  neighbours,
-  neededHpbw,
-}: {
-  neighbours: readonly Neighbour[];
-  neededHpbw: number;
-}) {
+export function NeighbourTable({ neighbours }: { neighbours: readonly Neighbour[] }) {
   const { missions, labelOf } = usePlanDesk();
   const { showContact } = usePlanView();
   return (
@@ -60,14 +52,14 @@ export function NeighbourTable({
             <Head num unit="deg">
               Apart
             </Head>
-            <Head num unit="bw">
+            <Head num unit="dB">
               Least
             </Head>
             <Head num>At</Head>
           </tr>
         </thead>
         <tbody>
-          {neighbours.slice(0, 6).map(({ contact, leastDeg, leastHpbw, leastAtMs }) => (
+          {neighbours.slice(0, 6).map(({ contact, apartDeg, leastDb, neededDb, leastAtMs }) => (
             <tr key={contact.id}>
               <RowHead className="font-normal!">
                 <button
@@ -80,9 +72,9 @@ export function NeighbourTable({
                   <span className="text-ink-muted">{labelOf(contact.receive.channelId)}</span>
                 </button>
               </RowHead>
-              <Cell num>{decimals(leastDeg, 1)}</Cell>
-              <Cell num strong className={leastHpbw < neededHpbw * 1.15 ? 'text-warn-text' : ''}>
-                {decimals(leastHpbw, 2)}
+              <Cell num>{decimals(apartDeg, 1)}</Cell>
+              <Cell num strong className={leastDb < neededDb + 1.5 ? 'text-warn-text' : ''}>
+                {decimals(leastDb, 1)}
               </Cell>
               <Cell num muted>
                 {clockSeconds(leastAtMs)}

@@ -39,7 +39,7 @@ export function BeamCut({ pair, frequencyMhz, width, height }: Props) {
   const path = lineOf<{ s: number; db: number }>()
     .x(({ s }) => x(s))
     .y(({ db }) => y(db));
-  const needed = -a.face.requiredIsolationDb;
+  const needed = -pair.neededDb;
   const [xa, xb] = [x(-between / 2), x(between / 2)];
   return (
     <svg
@@ -95,7 +95,7 @@ export function BeamCut({ pair, frequencyMhz, width, height }: Props) {
         fill="var(--warn-text)"
         className="halo"
       >
-        face asks {decimals(a.face.requiredIsolationDb, 0)} dB
+        {decimals(pair.neededDb, 0)} dB needed
       </text>
       <path d={path(cuts[0]) ?? ''} fill="none" stroke={a.color} strokeWidth="1.7" />
       <path

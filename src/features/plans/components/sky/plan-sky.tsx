@@ -1,5 +1,4 @@
 import { useMemo, useState } from 'react';
-import { requiredHpbw } from '../../../../../shared/schedule/facts/separation.ts';
 import { SkySheet } from '../../../../charts/sky-sheet.tsx';
 import { useSize } from '../../../../hooks/use-size.ts';
 import { counted } from '../../../../lib/format-number.ts';
@@ -20,7 +19,10 @@ export function PlanSky() {
   const { satellites } = usePlanDesk();
   const { instantMs, contactId } = usePlanView();
   const sky = useSkyInstant(instantMs);
-  const pairs = useMemo(() => closePairs(sky.beams, satellites), [sky.beams, satellites]);
+  const pairs = useMemo(
+    () => closePairs(sky.beams, satellites, instantMs),
+    [sky.beams, satellites, instantMs],
+  );
   return (
     <>
       <div
@@ -95,8 +97,8 @@ function Sheet({ sky, pairs, width, height }: SheetProps) {
     x: Math.max(40, width / 2 - radius),
     y: Math.max(30, Math.min(60, height / 2 - radius)),
   };
-  const needed = pairs[0] ? requiredHpbw(pairs[0].a.face.receiveTaper) : null;
-  const near = pairs.filter(({ hpbw }) => needed !== null && hpbw < needed * 1.6).slice(0, 2);
+  // Six decibels more than needed: near enough to be worth a look.
+  const near = pairs.filter((pair) => pair.isolationDb < pair.neededDb + 6).slice(0, 2);
   const selected =
     sky.beams.find(({ contact }) => contact.id === contactId)?.contact.passId ?? null;
   return (
@@ -130,12 +132,7 @@ function Sheet({ sky, pairs, width, height }: SheetProps) {
         />
       ))}
       {near.map((pair) => (
-        <ClosePair
-          key={`${pair.a.contact.id} ${pair.b.contact.id}`}
-          pair={pair}
-          needed={needed ?? 0}
-          radius={radius}
-        />
+        <ClosePair key={`${pair.a.contact.id} ${pair.b.contact.id}`} pair={pair} radius={radius} />
       ))}
     </SkySheet>
   );

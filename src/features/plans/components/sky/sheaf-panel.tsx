@@ -1,4 +1,3 @@
-import { requiredHpbw } from '../../../../../shared/schedule/facts/separation.ts';
 import { Cell, Head, RowHead, Table } from '../../../../components/table.tsx';
 import { useSize } from '../../../../hooks/use-size.ts';
 import { decimals } from '../../../../lib/format-number.ts';
@@ -59,8 +58,7 @@ export function SheafPanel({ beams, pairs }: Props) {
               Cut through {pair.a.contact.satelliteName} and {pair.b.contact.satelliteName}
             </h3>
             <span className="figures text-caption text-ink-muted">
-              {decimals(pair.apartDeg, 1)}° apart, {decimals(pair.hpbw, 2)} half-power widths, needs{' '}
-              {requiredHpbw(pair.a.face.receiveTaper)}
+              {decimals(pair.apartDeg, 1)}° apart, {decimals(pair.hpbw, 2)} half-power widths
             </span>
           </div>
           <BeamCut
@@ -93,12 +91,10 @@ function ClosestPairs({ pairs }: { pairs: readonly BeamPair[] }) {
         <thead>
           <tr>
             <Head>Closest pairs</Head>
-            <Head num unit="bw">
-              Apart
-            </Head>
             <Head num unit="dB">
-              Down
+              Isolation
             </Head>
+            <Head num>Needed</Head>
           </tr>
         </thead>
         <tbody>
@@ -110,9 +106,11 @@ function ClosestPairs({ pairs }: { pairs: readonly BeamPair[] }) {
                 {pairName(pair)}
               </RowHead>
               <Cell num strong={index === 0}>
-                {decimals(pair.hpbw, 2)}
+                {decimals(pair.isolationDb, 1)}
               </Cell>
-              <Cell num>{decimals(pair.downDb, 1)}</Cell>
+              <Cell num muted>
+                {decimals(pair.neededDb, 1)}
+              </Cell>
             </tr>
           ))}
         </tbody>

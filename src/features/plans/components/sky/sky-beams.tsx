@@ -91,16 +91,8 @@ export function IdleMarks({ idle, instantMs, radius }: IdleProps) {
   );
 }
 
-/** A hairline between two beams that come close, with their separation on it. */
-export function ClosePair({
-  pair,
-  needed,
-  radius,
-}: {
-  pair: BeamPair;
-  needed: number;
-  radius: number;
-}) {
+/** A hairline between two beams that come close, with their isolation on it. */
+export function ClosePair({ pair, radius }: { pair: BeamPair; radius: number }) {
   const [ax, ay] = directionPoint(pair.a.direction, radius);
   const [bx, by] = directionPoint(pair.b.direction, radius);
   const [mx, my] = [(ax + bx) / 2, (ay + by) / 2];
@@ -120,9 +112,9 @@ export function ClosePair({
         fill="var(--ink)"
         className="halo figures"
       >
-        {decimals(pair.hpbw, 2)} beamwidths
+        {decimals(pair.isolationDb, 1)} dB
         <tspan x={wx} dy="15" fontSize="12" fontWeight="400" fill="var(--ink-muted)">
-          needs {needed}
+          needs {decimals(pair.neededDb, 1)}
         </tspan>
       </text>
     </g>
