@@ -3,6 +3,7 @@ import type { Plan } from '../../../../shared/schemas/plan.ts';
 import type { Station } from '../../../../shared/schemas/station.ts';
 import { Button } from '../../../components/button.tsx';
 import { Skeleton } from '../../../components/states.tsx';
+import { isStale } from '../../../lib/api-error.ts';
 import { PlanDeskContext, usePlanDesk, type PlanDesk } from '../hooks/plan-desk.ts';
 import { PlanEditsContext, usePlanEdits } from '../hooks/plan-edits.ts';
 import { PlanViewContext, usePlanView } from '../hooks/plan-view.ts';
@@ -45,7 +46,14 @@ function Desk({ desk }: { desk: PlanDesk }) {
             <Body />
           </div>
           <PlanDialogs />
-          <EditFailure error={error} onClose={clearError} />
+          <EditFailure
+            error={error}
+            onClose={() => {
+              // What was thought out on an older plan is not offered again.
+              if (isStale(error)) edits.close();
+              clearError();
+            }}
+          />
         </PlanEditsContext>
       </PlanViewContext>
     </PlanDeskContext>

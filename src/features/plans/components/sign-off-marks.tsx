@@ -15,6 +15,7 @@ interface Props {
 /** Signatures of the last round: icon, mission, what became of it. */
 export function SignOffMarks({ signOffs, plan, series }: Props) {
   if (signOffs.length === 0) return null;
+  if (signOffs.length > 1 && signOffs.every(isSigned)) return <AllSigned signOffs={signOffs} />;
   return (
     <div className="flex items-center gap-3">
       <p className="hidden text-right text-caption text-ink-muted desk:block">
@@ -33,6 +34,22 @@ export function SignOffMarks({ signOffs, plan, series }: Props) {
         ))}
       </ul>
     </div>
+  );
+}
+
+const isSigned = ({ state }: SignOff): boolean => state === 'approved' || state === 'unchanged';
+
+/** Good news needs one line. */
+function AllSigned({ signOffs }: { signOffs: readonly SignOff[] }) {
+  const names = signOffs.map(({ missionName, byName }) => `${missionName} by ${byName ?? '–'}`);
+  return (
+    <p className="flex items-center gap-2" title={names.join(', ')}>
+      <Icon name="approve" size={18} className="text-ok-text" />
+      <span className="flex flex-col">
+        <span className="font-semibold">All {signOffs.length} missions</span>
+        <span className="text-caption text-ok-text">signed this revision</span>
+      </span>
+    </p>
   );
 }
 

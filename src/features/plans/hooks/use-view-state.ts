@@ -17,8 +17,21 @@ const SHAPE = {
   pass: z.uuid().optional(),
 };
 
-/** Where the plan opens: around now on its own day, else around its busiest hour and a half. */
-function firstStretch(span: Interval, legs: readonly PlanLeg[]): Interval {
+/** Where the plan opens: around the contact of the link, around now on its own day, else around its busiest hour and a half. */
+function firstStretch(
+  span: Interval,
+  legs: readonly PlanLeg[],
+  contactId: string | undefined,
+): Interval {
+  const named = legs.find((leg) => leg.contactId === contactId);
+  if (named)
+    return fitBrush(
+      {
+        fromMs: floorTo(named.fromMs - 40 * MINUTE_MS),
+        toMs: floorTo(named.fromMs + 50 * MINUTE_MS),
+      },
+      span,
+    );
   const now = serverNow();
   if (now >= span.fromMs && now < span.toMs)
     return fitBrush(
@@ -41,7 +54,7 @@ export function useViewState(span: Interval, legs: readonly PlanLeg[]): PlanView
   const [url, setUrl] = useUrlState(SHAPE);
   // While a hand moves the brush or the sky plays, the URL rests.
   const [moving, setMoving] = useState<{ stretch?: Interval; instantMs?: number }>({});
-  const [opened] = useState(() => firstStretch(span, legs));
+  const [opened] = useState(() => firstStretch(span, legs, url.contact));
 
   const stretch = useMemo(() => {
     if (moving.stretch) return moving.stretch;

@@ -40,6 +40,10 @@ export function IsolationChart({ neighbours, fromMs, toMs, used }: ChartProps) {
   );
 }
 
+/** Below the need it must be acted on; within 1.5 dB of it it is worth a look. */
+const toneOf = (spareDb: number): string =>
+  spareDb < 0 ? 'text-danger-text' : spareDb < 1.5 ? 'text-warn-text' : '';
+
 export function NeighbourTable({ neighbours }: { neighbours: readonly Neighbour[] }) {
   const { missions, labelOf } = usePlanDesk();
   const { showContact } = usePlanView();
@@ -73,7 +77,7 @@ export function NeighbourTable({ neighbours }: { neighbours: readonly Neighbour[
                 </button>
               </RowHead>
               <Cell num>{decimals(apartDeg, 1)}</Cell>
-              <Cell num strong className={leastDb < neededDb + 1.5 ? 'text-warn-text' : ''}>
+              <Cell num strong className={toneOf(leastDb - neededDb)}>
                 {decimals(leastDb, 1)}
               </Cell>
               <Cell num muted>
