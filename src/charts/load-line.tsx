@@ -156,16 +156,19 @@ function HourRules({ span, x, frame }: { span: Interval; x: Scale; frame: Frame 
   const hours: number[] = [];
   for (let ms = Math.ceil(span.fromMs / HOUR_MS) * HOUR_MS; ms <= span.toMs; ms += HOUR_MS)
     hours.push(ms);
-  const isThird = (ms: number): boolean => ((ms - span.fromMs) / HOUR_MS) % 3 === 0;
+  // Three hours a label where there is room for them.
+  const pxPerHour = x(span.fromMs + HOUR_MS) - x(span.fromMs);
+  const step = pxPerHour > 17 ? 3 : pxPerHour > 8 ? 6 : 12;
+  const isLabelled = (ms: number): boolean => ((ms - span.fromMs) / HOUR_MS) % step === 0;
   return (
     <g>
       {hours.map((ms) => (
         <g key={ms}>
           <path
             d={`M${x(ms)} ${frame.top}V${frame.bottom}`}
-            stroke={isThird(ms) ? 'var(--line)' : 'var(--line-soft)'}
+            stroke={isLabelled(ms) ? 'var(--line)' : 'var(--line-soft)'}
           />
-          {isThird(ms) && (
+          {isLabelled(ms) && (
             <text
               x={x(ms)}
               y={frame.bottom + 16}

@@ -28,7 +28,7 @@ export function Panel({ title, aside, actions, children, className, flush, level
           {title}
         </Heading>
         {aside && <div className="text-table text-ink-muted">{aside}</div>}
-        {actions && <div className="ml-auto flex items-center gap-2">{actions}</div>}
+        {actions && <div className="ml-auto flex flex-wrap items-center gap-2">{actions}</div>}
       </div>
       <div className={flush ? 'pb-1' : 'px-4 pb-4'}>{children}</div>
     </section>

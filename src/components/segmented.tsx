@@ -20,7 +20,7 @@ export function Segmented<T extends string>({
     <div
       role="group"
       aria-label={label}
-      className="inline-flex rounded-control border border-line-strong bg-surface"
+      className="inline-flex max-w-full flex-wrap rounded-control border border-line-strong bg-surface"
     >
       {options.map((option) => (
         <button

@@ -40,7 +40,7 @@ export function Header({ user }: { user: SessionUser }) {
         ))}
       </nav>
       <SmallNavigation entries={entries} />
-      <div className="ml-auto flex items-stretch">
+      <div className="ml-auto flex min-w-0 flex-wrap items-stretch justify-end">
         <div className="flex items-center gap-4 pr-4">
           <StationSwitch />
           <HeaderClock />
