@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
-import { LoadLine, type LoadChannel } from '../../../charts/load-line.tsx';
+import { LoadLine } from '../../../charts/load-line.tsx';
+import type { LoadChannel } from '../../../charts/load-side.tsx';
 import { useNow } from '../../../hooks/use-now.ts';
 import { useSize } from '../../../hooks/use-size.ts';
 import { usePlanDesk } from '../hooks/plan-desk.ts';

@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import { dopplerHz } from '../../../../shared/link/doppler.ts';
 import { lookAnglesAt } from '../../../../shared/orbit/track.ts';
 import { HOUR_MS } from '../../../../shared/time.ts';
 import { Button } from '../../../components/button.tsx';
@@ -7,9 +8,10 @@ import { MissionMark } from '../../../components/mission-mark.tsx';
 import { EmptyState } from '../../../components/states.tsx';
 import { Cell, Head, RowHead, Table } from '../../../components/table.tsx';
 import { useMissions } from '../../../hooks/use-missions.ts';
-import { decimals, signed } from '../../../lib/format-number.ts';
+import { decimals, MISSING, signed } from '../../../lib/format-number.ts';
 import { ageWords, clockSeconds, countdown } from '../../../lib/format-time.ts';
 import { passQueries } from '../../../queries/pass-queries.ts';
+import { satelliteQueries } from '../../../queries/satellite-queries.ts';
 import type { ShiftContact } from '../shift-contacts.ts';
 
 interface Props {
@@ -41,6 +43,9 @@ export function RunningTable({ contacts, now, labelOf, onChange }: Props) {
           <Head num unit="km/s">
             Range rate
           </Head>
+          <Head num unit="kHz">
+            Doppler
+          </Head>
           <Head>Elements</Head>
           {onChange && (
             <Head>
@@ -68,6 +73,9 @@ function RunningRow({
   const { contact } = one;
   const track = useQuery(passQueries.track(contact.passId));
   const pass = useQuery(passQueries.one(contact.passId));
+  const satellites = useQuery(satelliteQueries.list());
+  const downlinkMhz = satellites.data?.find(({ id }) => id === contact.satelliteId)?.downlink
+    .frequencyMhz;
   const look = track.data && lookAnglesAt(track.data, now);
   const ageHours = pass.data && (now - Date.parse(pass.data.elementSetEpochUtc)) / HOUR_MS;
   return (
@@ -97,6 +105,11 @@ function RunningRow({
       <Cell num>{decimals(look?.elevationDeg, 1)}</Cell>
       <Cell num>{decimals(look?.rangeKm, 0)}</Cell>
       <Cell num>{decimals(look?.rangeRateKmS, 2)}</Cell>
+      <Cell num>
+        {downlinkMhz !== undefined && look
+          ? signed(dopplerHz(downlinkMhz, look.rangeRateKmS) / 1000, 1)
+          : MISSING}
+      </Cell>
       <Cell className="text-table">
         {ageHours === undefined ? '' : `${ageWords(ageHours)} old`}
       </Cell>

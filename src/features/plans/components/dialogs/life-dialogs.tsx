@@ -3,47 +3,21 @@ import { useNavigate } from 'react-router-dom';
 import { useAnnounce } from '../../../../components/announcer.tsx';
 import { Button } from '../../../../components/button.tsx';
 import { Dialog } from '../../../../components/dialog.tsx';
-import { TextAreaField, TextField } from '../../../../components/field.tsx';
+import { TextAreaField } from '../../../../components/field.tsx';
 import { Facts } from '../../../../components/facts.tsx';
 import { ReasonDialog } from '../../../../components/reason-dialog.tsx';
-import { ErrorNote } from '../../../../components/states.tsx';
-import { ApiError } from '../../../../lib/api-error.ts';
-import { asNumber } from '../../../../lib/form-errors.ts';
-import { decimals } from '../../../../lib/format-number.ts';
 import { dateClock, shortDay } from '../../../../lib/format-time.ts';
 import {
   useReleasePlan,
   useRevisePlan,
-  useSetLimitOfDay,
   useSubmitPlan,
   useWithdrawPlan,
 } from '../../../../queries/plan-queries.ts';
 import { usePlanDesk } from '../../hooks/plan-desk.ts';
-import { ViolationList } from '../violation-list.tsx';
+import { Refusal } from './refusal.tsx';
 
 interface Props {
   onClose: () => void;
-}
-
-/** What stands in the way: broken rules by name, or the words of the server. */
-function Refusal({ error }: { error: Error | null }) {
-  if (!error) return null;
-  const violations = error instanceof ApiError ? error.violations : [];
-  return (
-    <div className="mt-3 flex flex-col gap-2">
-      <ErrorNote error={error} />
-      {violations.length > 0 && (
-        <div
-          className="max-h-60 overflow-y-auto rounded-control border border-line px-3 py-2"
-          tabIndex={0}
-          role="region"
-          aria-label="Broken rules"
-        >
-          <ViolationList violations={violations} />
-        </div>
-      )}
-    </div>
-  );
 }
 
 export function SubmitDialog({ onClose }: Props) {
@@ -218,61 +192,6 @@ export function ReviseDialog({ onClose }: Props) {
         Contacts that have begun, or begin within the freeze time, stay as they are.
       </p>
       <Refusal error={revise.error} />
-    </Dialog>
-  );
-}
-
-export function LimitDialog({ onClose }: Props) {
-  const { plan, faces } = usePlanDesk();
-  const setLimit = useSetLimitOfDay();
-  const announce = useAnnounce();
-  const [text, setText] = useState(String(plan.limitOfDayDb));
-  const value = asNumber(text);
-  const hardEnd = Math.max(...faces.map(({ hardEndDb }) => hardEndDb));
-  const isGood = value !== null && value > 0 && value <= hardEnd;
-  const send = (): void => {
-    if (!isGood) return;
-    setLimit.mutate(
-      { plan, limitOfDayDb: value },
-      {
-        onSuccess: () => {
-          announce(`The limit of the day is ${decimals(value, 1)} dB.`);
-          onClose();
-        },
-      },
-    );
-  };
-  return (
-    <Dialog
-      open
-      onClose={onClose}
-      title="Limit of the day"
-      description="Every check, run, reason and export of this plan goes by it. The change is recorded."
-      footer={
-        <>
-          <Button onClick={onClose}>Keep {decimals(plan.limitOfDayDb, 1)} dB</Button>
-          <Button
-            variant="primary"
-            busy={setLimit.isPending}
-            disabled={!isGood || value === plan.limitOfDayDb}
-            onClick={send}
-          >
-            Set the limit
-          </Button>
-        </>
-      }
-    >
-      <TextField
-        label="Largest scan loss"
-        unit="dB"
-        inputMode="decimal"
-        className="w-40"
-        value={text}
-        onChange={(event) => setText(event.target.value)}
-        hint={`Hard end of the faces: ${decimals(hardEnd, 1)} dB`}
-        error={isGood ? undefined : `Between 0 and ${decimals(hardEnd, 1)} dB`}
-      />
-      <Refusal error={setLimit.error} />
     </Dialog>
   );
 }

@@ -5,13 +5,8 @@ import { AssignDialog } from './assign-dialog.tsx';
 import { AssignmentDialog } from './assignment-dialog.tsx';
 import { ChangeDialog } from './change-dialog.tsx';
 import { KeysDialog } from './keys-dialog.tsx';
-import {
-  LimitDialog,
-  ReleaseDialog,
-  ReviseDialog,
-  SubmitDialog,
-  WithdrawDialog,
-} from './life-dialogs.tsx';
+import { ReleaseDialog, ReviseDialog, SubmitDialog, WithdrawDialog } from './life-dialogs.tsx';
+import { LimitDialog } from './limit-dialog.tsx';
 import { OperateDialog } from './operate-dialog.tsx';
 
 /** The dialog that is open, whichever part of the page opened it. */
