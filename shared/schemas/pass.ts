@@ -51,6 +51,10 @@ export const TrackPoint = z.strictObject({
   elevationDeg: z.number(),
   rangeKm: z.number(),
   rangeRateKmS: z.number(),
+  /** Shift of the downlink as it arrives. */
+  downlinkDopplerHz: z.number(),
+  /** Elevation with the refraction of standard air, for display only. */
+  apparentElevationDeg: z.number(),
   faces: z.array(
     z.strictObject({
       faceId: Id,

@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { PassTrack } from '../../shared/schemas/pass.ts';
 import { DAY_MS, HOUR_MS } from '../../shared/time.ts';
 import { freshFile, NOW, startTestApp, type TestApp } from '../support/test-app.ts';
 
@@ -8,6 +9,7 @@ beforeAll(async () => {
 });
 afterAll(() => test.close());
 
+type TrackPoint = PassTrack['points'][number];
 interface Upload {
   id: string | null;
   accepted: { catalogNumber: number; satelliteId: string; unchanged: boolean }[];
@@ -194,6 +196,22 @@ describe('using element sets', () => {
     // Half a degree of mean anomaly at 14.78 revolutions a day is 8.1 s.
     expect(shift / 1000).toBeGreaterThan(7);
     expect(shift / 1000).toBeLessThan(9);
+    const track = await operator
+      .get(`/api/passes/${after[3]?.id}/track?stepSeconds=60`)
+      .expect(200);
+    const { points } = track.body as { points: TrackPoint[] };
+    const [rising] = points;
+    const falling = points.at(-1);
+    // Approaching means a higher frequency: 2245 MHz at 7.5 km/s is 56 kHz at the very most.
+    expect(rising?.downlinkDopplerHz ?? 0).toBeGreaterThan(10_000);
+    expect(falling?.downlinkDopplerHz ?? 0).toBeLessThan(-10_000);
+    for (const point of points) {
+      expect(Math.abs(point.downlinkDopplerHz)).toBeLessThan(58_000);
+      expect(point.downlinkDopplerHz).toBeCloseTo((-2245e6 * point.rangeRateKmS) / 299_792.458, 3);
+      const raised = point.apparentElevationDeg - point.elevationDeg;
+      expect(raised).toBeGreaterThan(0);
+      expect(raised).toBeLessThan(0.3);
+    }
   });
 });
 

@@ -1,5 +1,7 @@
 import { directionOnFace } from '../../../shared/array/face-geometry.ts';
 import { scanLossDb } from '../../../shared/array/scan-loss.ts';
+import { dopplerHz } from '../../../shared/link/doppler.ts';
+import { refractionDeg } from '../../../shared/orbit/refraction.ts';
 import { directionAt, lookAnglesAt } from '../../../shared/orbit/track.ts';
 import type { FaceModel, UsableWindow } from '../../../shared/schedule/model.ts';
 import type { Pass as PassAnswer, PassTrack } from '../../../shared/schemas/pass.ts';
@@ -46,7 +48,7 @@ export const presentPass = (
 const MOST_POINTS = 10_800;
 
 export const presentTrack = (
-  { pass, prediction }: PassInForce,
+  { pass, prediction, satellite }: PassInForce,
   { faces, stepSeconds }: { faces: readonly FaceModel[]; stepSeconds: number },
 ): PassTrack => {
   const { track, aosMs, losMs } = prediction;
@@ -54,9 +56,12 @@ export const presentTrack = (
   const points: PassTrack['points'] = [];
   for (let atMs = aosMs; ; atMs = Math.min(atMs + stepMs, losMs)) {
     const direction = directionAt(track, atMs);
+    const look = lookAnglesAt(track, atMs);
     points.push({
       atUtc: toIso(atMs),
-      ...lookAnglesAt(track, atMs),
+      ...look,
+      downlinkDopplerHz: dopplerHz(satellite.downlink.frequencyMhz, look.rangeRateKmS),
+      apparentElevationDeg: look.elevationDeg + refractionDeg(look.elevationDeg),
       faces: faces.map((face) => {
         const { scanAngleRad } = directionOnFace(face, direction);
         return {
