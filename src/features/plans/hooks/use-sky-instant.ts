@@ -45,6 +45,8 @@ export interface SkyInstant {
   tracks: SkyTrack[];
   receiveBeams: number;
   transmitBeams: number;
+  /** Why tracks are missing, when they could not be read. */
+  error: Error | null;
 }
 
 const AHEAD_MS = 12 * MINUTE_MS;
@@ -58,7 +60,7 @@ interface Known {
 }
 
 /** Passes around an instant with their tracks; those that rise soon are fetched ahead, so that the sky plays. */
-function usePassesAround(instantMs: number): Known[] {
+function usePassesAround(instantMs: number): { known: Known[]; error: Error | null } {
   const { passes, plan, missions } = usePlanDesk();
   // Steps of minutes: the list must not change with every frame.
   const minute = Math.floor(instantMs / MINUTE_MS) * MINUTE_MS;
@@ -71,12 +73,16 @@ function usePassesAround(instantMs: number): Known[] {
   }, [passes, minute]);
   const tracks = useQueries({
     queries: near.map(({ pass }) => passQueries.track(pass.id)),
-    combine: (results) => results.map(({ data }) => data),
+    combine: (results) => ({
+      list: results.map(({ data }) => data),
+      error: results.find((result) => result.error)?.error ?? null,
+    }),
   });
   return useMemo(
-    () =>
-      near.flatMap(({ pass, interval }, index) => {
-        const track = tracks[index];
+    () => ({
+      error: tracks.error,
+      known: near.flatMap(({ pass, interval }, index) => {
+        const track = tracks.list[index];
         if (!track) return [];
         const contacts = plan.contacts
           .flatMap((one) => openContact(one) ?? [])
@@ -92,13 +98,14 @@ function usePassesAround(instantMs: number): Known[] {
         };
         return [{ pass, interval, contacts, track, sky }];
       }),
+    }),
     [near, tracks, plan.contacts, missions],
   );
 }
 
 export function useSkyInstant(instantMs: number): SkyInstant {
   const { faces, satellites, legs, missions } = usePlanDesk();
-  const known = usePassesAround(instantMs);
+  const { known, error } = usePassesAround(instantMs);
   const at = (interval: Interval): boolean =>
     interval.fromMs <= instantMs && instantMs < interval.toMs;
   const up = known.filter(({ interval }) => at(interval));
@@ -137,5 +144,6 @@ export function useSkyInstant(instantMs: number): SkyInstant {
     tracks: up.map(({ sky }) => sky),
     receiveBeams: count('receive'),
     transmitBeams: count('transmit'),
+    error,
   };
 }

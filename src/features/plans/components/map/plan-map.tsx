@@ -5,6 +5,7 @@ import { useMemo, useState } from 'react';
 import { MapContainer, ZoomControl } from 'react-leaflet';
 import { Segmented } from '../../../../components/segmented.tsx';
 import { decimals } from '../../../../lib/format-number.ts';
+import { ErrorNote } from '../../../../components/states.tsx';
 import { useSize } from '../../../../hooks/use-size.ts';
 import { coverageRing, elevationRing } from '../../model/coverage.ts';
 import { usePlanDesk } from '../../hooks/plan-desk.ts';
@@ -70,6 +71,11 @@ function MapPanel({ sky }: { sky: ReturnType<typeof useSkyInstant> }) {
         />
       </div>
       <MapLegend heightsKm={heightsKm} />
+      {sky.error && (
+        <div className="absolute inset-x-0 top-3 z-[500] mx-auto w-fit">
+          <ErrorNote error={sky.error} />
+        </div>
+      )}
     </section>
   );
 }

@@ -1,5 +1,6 @@
 import { useMemo, useState } from 'react';
 import { SkySheet } from '../../../../charts/sky-sheet.tsx';
+import { ErrorNote } from '../../../../components/states.tsx';
 import { useSize } from '../../../../hooks/use-size.ts';
 import { counted } from '../../../../lib/format-number.ts';
 import { clockSeconds } from '../../../../lib/format-time.ts';
@@ -73,6 +74,11 @@ function SkyPanel({ sky, pairs }: { sky: SkyInstant; pairs: readonly BeamPair[] 
       >
         {ground && width > 0 && <Sheet sky={sky} pairs={pairs} width={width} height={height} />}
         <SkyLegend />
+        {sky.error && (
+          <div className="absolute inset-x-0 top-3 mx-auto w-fit">
+            <ErrorNote error={sky.error} />
+          </div>
+        )}
       </div>
     </section>
   );
