@@ -91,10 +91,8 @@ function ClosestPairs({ pairs }: { pairs: readonly BeamPair[] }) {
         <thead>
           <tr>
             <Head>Closest pairs</Head>
-            <Head num unit="dB">
-              Isolation
-            </Head>
-            <Head num>Needed</Head>
+            <Head num>dB</Head>
+            <Head num>needs</Head>
           </tr>
         </thead>
         <tbody>
